@@ -1,0 +1,13 @@
+#pragma once
+
+#include <vector>
+
+#include "core/decision/decision.hpp"
+#include "core/decision/problem.hpp"
+
+namespace steelyard {
+
+/// One notice for each member of the file that this version does not know.
+std::vector<Notice> unknown_member_notices(const Decision& decision);
+
+} // namespace steelyard

@@ -1,0 +1,129 @@
+#pragma once
+
+#include <array>
+#include <optional>
+#include <string>
+#include <utility>
+#include <vector>
+
+#include "core/decision/decision.hpp"
+#include "core/decision/problem.hpp"
+#include "core/measure/musts.hpp"
+
+/// Everything the solver says about a decision. Vectors over options follow `options` (the options in play,
+/// in the order of the file); vectors over the items of a set follow its `items`.
+namespace steelyard {
+
+/// A judged pair beside what the other answers of its set say. `a` comes before `b` in the set's items.
+struct Misfit {
+    Id a;
+    Id b;
+    double given = 1;
+    std::optional<double>
+        implied; ///< Ratio of the weights re-derived without this pair; none if the set falls apart.
+};
+
+/// Items that no judgment links with the others, when a set does not hang together.
+using Parts = std::vector<std::vector<Id>>;
+
+struct SetResult {
+    Id set;
+    Id by; ///< Empty for the group.
+    bool from_points = false;
+    std::vector<Id> items;
+    std::vector<std::array<Id, 2>> missing;
+    std::vector<std::array<Id, 2>> open; ///< The missing pairs that nobody skipped on purpose.
+    std::optional<std::vector<double>> weights;
+    std::optional<std::vector<double>> eigenvector;
+    std::optional<std::vector<double>> geometric_mean;
+    std::optional<std::vector<double>> column_average;
+    std::optional<double> lambda_max;
+    std::optional<double> lambda_hand; ///< Mean of (A w)_i / w_i for `weights`, the common hand estimate.
+    std::optional<double> ci;
+    std::optional<double> ri;
+    std::optional<double> cr;
+    std::optional<double> gci;
+    std::optional<double> koczkodaj;
+    std::optional<std::array<Id, 3>> worst_triad;
+    std::vector<std::array<Id, 3>> cycles;      ///< a > b > c > a, starting with the one first in items.
+    std::vector<std::array<Id, 3>> tied_cycles; ///< a >= b >= c >= a with one or two ties.
+    std::optional<double> zeta;  ///< Kendall's coefficient of consistence, complete sets without ties.
+    std::vector<Misfit> misfits; ///< Worst first.
+    Parts parts;                 ///< More than one where the set does not hang together.
+};
+
+struct NodeResult {
+    Id node;
+    Id parent; ///< Empty for the root.
+    int depth = 0;
+    bool leaf = true;
+    double local_weight = 1;
+    double weight = 1;                ///< Product of local weights from the root.
+    std::vector<double> contribution; ///< Per option: what this node adds to its score.
+};
+
+struct LeafResult {
+    Id leaf;
+    double weight = 0;
+    std::vector<double> local; ///< Per option, placeholders included.
+    std::vector<bool> missing; ///< Per option: `local` is a placeholder.
+};
+
+/// Figures computed from a cost sheet, for every option that has one, in play or not.
+struct ComputedFigures {
+    Id leaf;
+    std::vector<std::pair<Id, double>> values;
+};
+
+struct MustResult {
+    Id requirement;
+    Id option;
+    MustState state = MustState::unchecked;
+    std::optional<double> value;
+};
+
+struct Exclusion {
+    Id option;
+    Id requirement;
+    std::optional<double> value;
+};
+
+enum class OpenKind { judgment, points, figure, curve, grade, worth, requirement };
+
+/// Something not yet answered. Which of the ids are set depends on the kind:
+/// judgment: set, a, b; points: set; figure: criterion, option; curve: criterion; grade: criterion, option;
+/// worth: criterion, grade; requirement: requirement, option.
+struct OpenItem {
+    OpenKind kind = OpenKind::judgment;
+    Id set{};
+    Id a{};
+    Id b{};
+    Id criterion{};
+    Id option{};
+    Id grade{};
+    Id requirement{};
+};
+
+struct Results {
+    std::string decision_sha256;
+    Settings settings;
+    std::vector<Id> options; ///< In play.
+    std::vector<SetResult> sets;
+    std::vector<NodeResult> nodes; ///< Depth first, root first.
+    std::vector<LeafResult> leaves;
+    std::vector<ComputedFigures> figures;
+    std::vector<double> scores;
+    std::optional<std::vector<double>> shares; ///< None if all scores are 0.
+    std::vector<int> ranks;
+    std::optional<std::size_t> first; ///< Index in `options` of the option in first place.
+    bool provisional = false;
+    std::vector<std::pair<Id, std::array<double, 2>>>
+        ranges;                        ///< Ideal synthesis: score with what is missing at 0 and at 1.
+    std::optional<double> lead_points; ///< 100 x the difference of the first two scores.
+    std::vector<MustResult> musts;
+    std::vector<Exclusion> excluded;
+    std::vector<OpenItem> open;
+    std::vector<Notice> notices;
+};
+
+} // namespace steelyard
