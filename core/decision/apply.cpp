@@ -51,7 +51,7 @@ void insert_at(std::vector<T>& list, std::size_t at, T value) {
 /// Carries out edits one after the other on a decision of its own.
 class Applier {
 public:
-    explicit Applier(const Decision& decision) : d_(decision) {}
+    explicit Applier(Decision decision) : d_(std::move(decision)) {}
 
     void operator()(const SetHeading& e) {
         switch (e.heading) {
@@ -210,6 +210,28 @@ private:
     }
 };
 
+/// Edits after which entries may no longer fit. An entry that does not fit when it is made is refused, not
+/// removed.
+struct ChangesStructure {
+    template<class T>
+    bool operator()(const T&) const {
+        return true;
+    }
+    template<class T>
+    bool operator()(const Enter<T>&) const {
+        return false;
+    }
+    bool operator()(const SetHeading&) const { return false; }
+    bool operator()(const ClearJudgment&) const { return false; }
+    bool operator()(const ClearPoints&) const { return false; }
+    bool operator()(const ReopenSet&) const { return false; }
+    bool operator()(const ChangeSettings&) const { return false; }
+};
+
+bool changes_structure(const Edit& edit) {
+    return std::visit(ChangesStructure{}, edit);
+}
+
 void add_count(std::string& text, std::size_t count, const char* one, const char* many) {
     if (count == 0)
         return;
@@ -217,6 +239,17 @@ void add_count(std::string& text, std::size_t count, const char* one, const char
 }
 
 } // namespace
+
+Losses& Losses::operator+=(const Losses& other) {
+    judgments += other.judgments;
+    points += other.points;
+    figures += other.figures;
+    costs += other.costs;
+    grades += other.grades;
+    checks += other.checks;
+    requirements += other.requirements;
+    return *this;
+}
 
 std::string sentence(const Losses& losses) {
     std::string text;
@@ -237,13 +270,18 @@ std::string sentence(const Losses& losses) {
 }
 
 Applied apply(const Decision& decision, const std::vector<Edit>& edits) {
-    Applier applier(decision);
-    for (const auto& edit : edits)
+    Applied applied{decision, {}, {}};
+    for (const auto& edit : edits) {
+        Applier applier(std::move(applied.decision));
         std::visit(applier, edit);
-    Applied applied{std::move(applier.d_), {}, std::move(applier.problems_)};
-    if (!applied.problems.empty())
-        return applied;
-    applied.losses = prune(applied.decision, decision);
+        applied.decision = std::move(applier.d_);
+        if (!applier.problems_.empty()) {
+            applied.problems = std::move(applier.problems_);
+            return applied;
+        }
+        if (changes_structure(edit))
+            applied.losses += prune(applied.decision, decision);
+    }
     applied.problems = check(applied.decision).problems;
     return applied;
 }

@@ -19,6 +19,7 @@ struct Losses {
     std::size_t checks = 0;
     std::size_t requirements = 0;
     bool operator==(const Losses&) const = default;
+    Losses& operator+=(const Losses& other);
     bool any() const { return *this != Losses{}; }
 };
 

@@ -21,7 +21,7 @@ constexpr double scale_end = 9;       ///< Saaty 1980: the scale runs from 1/9 t
 constexpr int most_years = 200;
 constexpr int most_trials = 10'000'000;
 
-/// 1/100 and 1/9 as a person may type them (0.01, 0.11, 0.1111) should not be refused for their last digit.
+/// 1/9 typed with many digits should not draw a notice for its last one.
 constexpr double rounding = 1e-9;
 
 std::string at(const char* list, std::size_t index, const char* member = "") {
@@ -68,6 +68,9 @@ private:
     void notice(const char* code, std::string text, std::string where) {
         notices_.push_back({code, std::move(text), std::move(where)});
     }
+
+    /// True where every member of an object could be read, so that one left at its default was left out.
+    bool read_whole(const std::string& object) const { return !unread_.objects.contains(object); }
 
     /// Takes an id into `known`, refusing what is too long, repeated or, in a decision made here, empty.
     void take_id(std::set<Id>& known, const Id& id, const std::string& where, const char* what) {
@@ -168,7 +171,7 @@ private:
             if (line->worst == line->best)
                 refuse(where + "/best", shown(line->best), "another value than worst");
         } else if (const auto* points = std::get_if<PointsCurve>(&curve.shape)) {
-            if (points->at.empty() && !unread_.any)
+            if (points->at.empty() && read_whole(where))
                 refuse(where + "/at", "no point", "at least one point");
             for (std::size_t i = 0; i < points->at.size(); ++i) {
                 const std::string point = where + "/at/" + std::to_string(i);
@@ -199,7 +202,7 @@ private:
         for (std::size_t i = 0; i < d_.people.size(); ++i) {
             const Person& person = d_.people[i];
             number_over(person.share, 0, true, at("people", i, "/share"), "a share of 0 or more");
-            all_read = all_read && is_read(person.share);
+            all_read = all_read && person.share >= 0; // Also false for one that was not read.
             sum += person.share;
             for (std::size_t k = 0; k < person.abstains.size(); ++k) {
                 refer_option(person.abstains[k], at("people", i, "/abstains/") + std::to_string(k));
@@ -277,7 +280,7 @@ private:
     void ratio(double ratio, const std::string& where) {
         if (!is_read(ratio))
             return;
-        if (!(ratio > 0) || ratio > largest_ratio * (1 + rounding) || ratio * largest_ratio < 1 - rounding) {
+        if (ratio < 1 / largest_ratio || ratio > largest_ratio) {
             refuse(where, shown(ratio), "a ratio from 1/100 to 100");
         } else if (ratio > scale_end * (1 + rounding) || ratio * scale_end < 1 - rounding) {
             notice("ratio-off-scale", "The ratio " + shown(ratio) + " lies outside 1/9 to 9.", where);
@@ -311,7 +314,7 @@ private:
             for (const auto& child : set->children) {
                 const bool named = std::any_of(p.points.begin(), p.points.end(),
                                                [&](const auto& entry) { return entry.first == child.id; });
-                if (!named && !(unread_.any && p.points.empty())) {
+                if (!named && read_whole(at("points", i))) {
                     refuse(at("points", i, "/points"), "no points for " + quoted(child.id),
                            "points for every item");
                 }
@@ -353,7 +356,7 @@ private:
             if (c.year && *c.year > most_years) {
                 refuse(at("costs", i, "/year"), shown(*c.year), "a whole number from 0 to 200");
             }
-            if (c.kind == CostKind::in_year && !c.year && !unread_.any) {
+            if (c.kind == CostKind::in_year && !c.year && read_whole(at("costs", i))) {
                 refuse(at("costs", i), "no member \"year\"", "one for a cost in one year");
             }
             if (leaf != nullptr && !leaf->cost_sheet) {
@@ -379,6 +382,8 @@ private:
     }
 
     void figure_notices(const Node& leaf, const Figure& f, const std::string& where) {
+        if (unread_.any)
+            return; // The file is refused anyway, and its anchors may not be numbers.
         if (leaf.cost_sheet) {
             notice("figure-unused", "This figure does not count: its criterion has a cost sheet.", where);
         } else if (leaf.curve && f.value) {

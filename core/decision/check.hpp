@@ -1,5 +1,7 @@
 #pragma once
 
+#include <set>
+#include <string>
 #include <vector>
 
 #include "core/decision/decision.hpp"
@@ -22,6 +24,7 @@ struct Unread {
     bool nodes = false;
     bool grades = false;
     bool requirements = false;
+    std::set<std::string> objects; ///< Pointers of the objects in which something failed.
 };
 
 /// Checks every rule that a decision must keep beyond its shape: ids, references, sets, limits, shares,

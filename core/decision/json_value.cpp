@@ -47,6 +47,16 @@ void append_quoted(std::string& out, std::string_view text) {
     out += '"';
 }
 
+/// At most 60 bytes of a text, whole UTF-8 characters.
+std::string cut(const std::string& text) {
+    if (text.size() <= 60)
+        return text;
+    std::size_t end = 57;
+    while (end > 0 && (static_cast<unsigned char>(text[end]) & 0xc0) == 0x80)
+        --end;
+    return text.substr(0, end) + "...";
+}
+
 bool is_container(const JsonValue& value) {
     return (value.kind == JsonValue::Kind::array && !value.items.empty()) ||
            (value.kind == JsonValue::Kind::object && !value.members.empty());
@@ -167,7 +177,7 @@ std::string JsonValue::shown() const {
     case Kind::boolean:
         return truth ? "true" : "false";
     case Kind::number:
-        return text;
+        return cut(text);
     case Kind::array:
         return "an array";
     case Kind::object:
@@ -175,15 +185,8 @@ std::string JsonValue::shown() const {
     case Kind::string:
         break;
     }
-    std::string cut = text;
-    if (cut.size() > 60) {
-        std::size_t end = 57;
-        while (end > 0 && (static_cast<unsigned char>(cut[end]) & 0xc0) == 0x80)
-            --end; // Keep UTF-8 whole.
-        cut = cut.substr(0, end) + "...";
-    }
     std::string quoted;
-    append_quoted(quoted, cut);
+    append_quoted(quoted, cut(text));
     return quoted;
 }
 

@@ -1,5 +1,6 @@
 #include <cmath>
 #include <cstdlib>
+#include <limits>
 #include <nlohmann/json.hpp>
 #include <set>
 #include <utility>
@@ -44,6 +45,7 @@ public:
     bool key(string_t& name) override {
         Level& level = levels_.back();
         level.name = name;
+        level.named = true;
         level.skip = !level.names.insert(name).second;
         if (level.skip)
             refuse(place(), "a member name that stands here twice", "each name once");
@@ -65,7 +67,10 @@ public:
                 why.find("UTF-8") != std::string::npos || why.find("surrogate") != std::string::npos;
             const auto column = "byte " + std::to_string(position);
             if (utf8) {
-                refuse(place(), "invalid UTF-8 at " + column, "UTF-8 text");
+                const bool in_name = !levels_.empty() &&
+                                     levels_.back().value.kind == JsonValue::Kind::object &&
+                                     !levels_.back().named;
+                refuse(in_name ? container_place() : place(), "invalid UTF-8 at " + column, "UTF-8 text");
             } else {
                 refuse(levels_.empty() ? "" : container_place(), "not JSON at " + column,
                        "a JSON text (RFC 8259)");
@@ -77,6 +82,7 @@ public:
 private:
     struct Level {
         JsonValue value;
+        bool named = false;          ///< A name was read and its value has not been.
         std::string name;            ///< The member being read, in an object.
         bool skip = false;           ///< That member is a repetition: read, checked and dropped.
         std::set<std::string> names; ///< Member names so far.
@@ -106,11 +112,11 @@ private:
         JsonValue value;
         value.kind = JsonValue::Kind::number;
         value.number = std::strtod(digits.c_str(), nullptr);
-        if (!std::isfinite(value.number)) {
-            refuse(place(), digits, "a finite number");
-            value.number = 0;
-        }
         value.text = std::move(digits);
+        if (!std::isfinite(value.number)) {
+            refuse(place(), value.shown(), "a finite number");
+            value.number = std::numeric_limits<double>::quiet_NaN(); // Named here; later checks pass over it.
+        }
         return put(std::move(value));
     }
 
@@ -120,6 +126,7 @@ private:
             return true;
         }
         Level& level = levels_.back();
+        level.named = false;
         if (level.value.kind == JsonValue::Kind::array) {
             level.value.items.push_back(std::move(value));
         } else if (!level.skip) {
@@ -134,7 +141,7 @@ private:
                    "at most " + std::to_string(limits_.depth));
             return false; // Going on would only go deeper.
         }
-        levels_.push_back({std::move(value), {}, false, {}});
+        levels_.push_back({.value = std::move(value)});
         return true;
     }
 
@@ -168,6 +175,10 @@ ParsedJson parse_json(std::string_view text, const JsonLimits& limits) {
     }
     if (looks_like_utf16(text)) {
         parsed.problems.push_back({"", "UTF-16 text", "UTF-8 text"});
+        return parsed;
+    }
+    if (text.find('\0') != std::string_view::npos) {
+        parsed.problems.push_back({"", "a text with a zero byte", "a JSON text (RFC 8259)"});
         return parsed;
     }
     if (text.find_first_not_of(" \t\r\n") == std::string_view::npos) {

@@ -364,6 +364,7 @@ private:
 
     void refuse(std::string at, std::string found, std::string expected) {
         unread_.any = true;
+        unread_.objects.insert(at_);
         if (problems_.size() < max_problems) {
             problems_.push_back({std::move(at), std::move(found), std::move(expected)});
         }

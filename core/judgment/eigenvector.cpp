@@ -124,6 +124,8 @@ Completion complete_optimally(const PairMatrix& pairs) {
     constexpr int most_steps =
         60; // Four were the most seen for n = 9; convexity makes the halving below safe.
     constexpr double longest_step = 2; // In ln a: keeps a far start from leaping where curvature is flat.
+    constexpr double level = 1e-14;    // Rounding of lambda, relative.
+    constexpr double settled = 1e-12;  // In ln a: Newton's next step would be far below the last digit.
     constexpr double flat = 1e-13; // Gradient relative to lambda: rounding of the vectors is of this size.
     for (int step = 0; step < most_steps; ++step) {
         const VectorXd& w = principal.right;
@@ -164,12 +166,14 @@ Completion complete_optimally(const PairMatrix& pairs) {
         if (longest > longest_step)
             direction *= longest_step / longest;
 
+        // Near the minimum lambda is flat to its last digits while the steps still gain: a step that leaves
+        // it level counts.
         bool improved = false;
         for (int halving = 0; halving < 40 && !improved; ++halving, direction *= 0.5) {
             const VectorXd candidate = x + direction;
             fill(a, candidate);
             PrincipalPair next = principal_eigenvector(a, &principal);
-            if (next.lambda < principal.lambda) {
+            if (next.lambda < principal.lambda * (1 + level)) {
                 x = candidate;
                 principal = std::move(next);
                 improved = true;
@@ -179,6 +183,8 @@ Completion complete_optimally(const PairMatrix& pairs) {
             fill(a, x);
             break;
         }
+        if (longest < settled)
+            break;
     }
     return {std::move(a), std::move(principal)};
 }

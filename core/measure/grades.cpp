@@ -5,9 +5,9 @@
 
 namespace steelyard {
 
-std::optional<double> graded_worth(const std::vector<Person>& people, const Node& leaf, const Id& option,
-                                   const std::vector<const GradeEntry*>& entered,
-                                   const std::vector<std::optional<double>>& worths) {
+GradeFinding find_grade_worth(const std::vector<Person>& people, const Node& leaf, const Id& option,
+                              const std::vector<const GradeEntry*>& entered,
+                              const std::vector<std::optional<double>>& worths) {
     std::map<Id, Id> grade_by; // Person to the grade that stands; "" is agreed in the room.
     for (const GradeEntry* entry : entered)
         grade_by[entry->by] = entry->grade;
@@ -19,8 +19,9 @@ std::optional<double> graded_worth(const std::vector<Person>& people, const Node
         return std::nullopt;
     };
     if (const auto agreed = grade_by.find(Id{}); agreed != grade_by.end() && !agreed->second.empty()) {
-        return worth_of_grade(agreed->second);
+        return {true, worth_of_grade(agreed->second)};
     }
+    GradeFinding finding;
     double sum = 0;
     double shares = 0;
     for (const auto& person : people) {
@@ -29,15 +30,16 @@ std::optional<double> graded_worth(const std::vector<Person>& people, const Node
             continue;
         if (std::find(person.abstains.begin(), person.abstains.end(), option) != person.abstains.end())
             continue;
+        finding.given = true;
         const auto worth = worth_of_grade(own->second);
         if (!worth)
-            return std::nullopt;
+            return finding;
         sum += person.share * *worth;
         shares += person.share;
     }
-    if (shares == 0)
-        return std::nullopt;
-    return sum / shares;
+    if (finding.given)
+        finding.worth = sum / shares;
+    return finding;
 }
 
 } // namespace steelyard

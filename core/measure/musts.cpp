@@ -50,6 +50,8 @@ MustFinding find_must(const Decision& decision, const Figures& figures, const Re
         const auto figure = figures.of(requirement.criterion, option);
         return judge(requirement, figure.value, figure.low, figure.high).value_or(MustFinding{});
     }
+    const bool limited = requirement.at_least || requirement.at_most;
+    if (!requirement.yes_no && !limited) return {};
     const auto last = std::find_if(decision.checks.rbegin(), decision.checks.rend(), [&](const Check& check) {
         return check.requirement == requirement.id && check.option == option;
     });

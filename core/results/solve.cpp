@@ -85,6 +85,11 @@ private:
         }
     }
 
+    GradeFinding grade_of(const Node& leaf, const Id& option) const {
+        return find_grade_worth(d_.people, leaf, option, grade_entries_.at(leaf.id, option),
+                                grade_worths_.at(leaf.id));
+    }
+
     /// Worths of the options on a leaf. `pairs`: the solution of the leaf's own set, where it has one.
     LeafWorths worths_on(const Node& leaf, const std::vector<Id>& options, const SetResult* pairs) const {
         LeafWorths out;
@@ -112,9 +117,7 @@ private:
         case RateBy::grade:
             out.anchored = true;
             for (std::size_t o = 0; o < options.size(); ++o) {
-                out.worths[o] =
-                    graded_worth(d_.people, leaf, options[o], grade_entries_.at(leaf.id, options[o]),
-                                 grade_worths_.at(leaf.id));
+                out.worths[o] = grade_of(leaf, options[o]).worth;
             }
             break;
         }
@@ -345,6 +348,9 @@ private:
         const OpenKind kind = leaf.rate == RateBy::figure ? OpenKind::figure : OpenKind::grade;
         for (std::size_t o = 0; o < results_.options.size(); ++o) {
             if (!values.missing[o])
+                continue;
+            // A grade whose worth is missing is given; what is open is its worth or the judgments behind it.
+            if (kind == OpenKind::grade && grade_of(leaf, results_.options[o]).given)
                 continue;
             results_.open.push_back({.kind = kind, .criterion = leaf.id, .option = results_.options[o]});
         }
