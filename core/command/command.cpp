@@ -27,13 +27,11 @@ std::string read_stream(std::istream& in) {
 }
 
 std::optional<std::string> read_text(const std::string& file, std::istream& in, std::ostream& err) {
-    if (file == "-")
-        return read_stream(in);
+    if (file == "-") return read_stream(in);
     std::ifstream stream(file, std::ios::binary);
     if (stream) {
         std::string text = read_stream(stream);
-        if (!stream.bad())
-            return text;
+        if (!stream.bad()) return text;
     }
     err << file << " cannot be read.\n";
     return std::nullopt;
@@ -43,20 +41,16 @@ std::optional<std::string> read_text(const std::string& file, std::istream& in, 
 std::optional<Decision> open_decision(const std::string& file, std::istream& in, std::ostream& err,
                                       std::vector<Notice>* notices = nullptr) {
     const auto text = read_text(file, in, err);
-    if (!text)
-        return std::nullopt;
+    if (!text) return std::nullopt;
     ReadResult read = read_decision(*text);
-    for (const auto& problem : read.problems)
-        err << sentence(problem) << '\n';
-    if (notices != nullptr)
-        *notices = std::move(read.notices);
+    for (const auto& problem : read.problems) err << sentence(problem) << '\n';
+    if (notices != nullptr) *notices = std::move(read.notices);
     return std::move(read.decision);
 }
 
 int check_file(const std::string& file, std::istream& in, std::ostream& out, std::ostream& err) {
     std::vector<Notice> notices;
-    if (!open_decision(file, in, err, &notices))
-        return refused;
+    if (!open_decision(file, in, err, &notices)) return refused;
     for (const auto& notice : notices) {
         out << (notice.at.empty() ? "" : "At " + notice.at + ": ") << notice.text << '\n';
     }
@@ -65,8 +59,7 @@ int check_file(const std::string& file, std::istream& in, std::ostream& out, std
 
 int solve_file(const std::string& file, std::istream& in, std::ostream& out, std::ostream& err) {
     const auto decision = open_decision(file, in, err);
-    if (!decision)
-        return refused;
+    if (!decision) return refused;
     out << write_results(*decision, solve(*decision));
     return out.flush() ? done : cannot_write;
 }
@@ -93,8 +86,7 @@ int run_command(int argc, const char* const* argv, std::istream& in, std::ostrea
     } catch (const CLI::ParseError& error) {
         return app.exit(error, out, err) == 0 ? done : wrong_usage;
     }
-    if (check->parsed())
-        return check_file(file, in, out, err);
+    if (check->parsed()) return check_file(file, in, out, err);
     return solve_file(file, in, out, err);
 }
 

@@ -55,21 +55,11 @@ public:
 
     void operator()(const SetHeading& e) {
         switch (e.heading) {
-        case Heading::title:
-            d_.title = e.text;
-            break;
-        case Heading::question:
-            d_.question = e.text;
-            break;
-        case Heading::author:
-            d_.author = e.text;
-            break;
-        case Heading::decide_by:
-            d_.decide_by = e.text;
-            break;
-        case Heading::notes:
-            d_.notes = e.text;
-            break;
+        case Heading::title: d_.title = e.text; break;
+        case Heading::question: d_.question = e.text; break;
+        case Heading::author: d_.author = e.text; break;
+        case Heading::decide_by: d_.decide_by = e.text; break;
+        case Heading::notes: d_.notes = e.text; break;
         }
     }
 
@@ -79,8 +69,7 @@ public:
     }
     template<class T>
     void operator()(const Change<T>& e) {
-        if (T* old = find(list_of(d_, static_cast<T*>(nullptr)), e.value.id))
-            *old = e.value;
+        if (T* old = find(list_of(d_, static_cast<T*>(nullptr)), e.value.id)) *old = e.value;
     }
     template<class T>
     void operator()(const Move<T>& e) {
@@ -94,15 +83,13 @@ public:
     template<class T>
     void operator()(const Remove<T>& e) {
         auto& list = list_of(d_, static_cast<T*>(nullptr));
-        if (T* old = find(list, e.id))
-            list.erase(list.begin() + (old - list.data()));
+        if (T* old = find(list, e.id)) list.erase(list.begin() + (old - list.data()));
         refuse_if_on_record(static_cast<T*>(nullptr), e.id);
     }
 
     void operator()(const AddNode& e) {
         if (Node* parent = node(e.parent)) {
-            if (parent->is_leaf())
-                stop_rating(*parent);
+            if (parent->is_leaf()) stop_rating(*parent);
             insert_at(parent->children, e.at, e.node);
         }
     }
@@ -115,8 +102,7 @@ public:
     }
     void operator()(const MoveNode& e) {
         const Node* moved = node(e.node);
-        if (moved == nullptr || node(e.parent) == nullptr)
-            return;
+        if (moved == nullptr || node(e.parent) == nullptr) return;
         if (find_node(*moved, e.parent) != nullptr) {
             refuse("a criterion moved below itself", "another place");
             return;
@@ -126,8 +112,7 @@ public:
         (*this)(AddNode{e.parent, std::move(value), e.at});
     }
     void operator()(const RemoveNode& e) {
-        if (node(e.node) == nullptr)
-            return;
+        if (node(e.node) == nullptr) return;
         if (e.node == d_.criteria.id) {
             refuse("the goal itself", "a criterion below it");
             return;
@@ -164,15 +149,13 @@ private:
     template<class T>
     T* find(std::vector<T>& list, const Id& id) {
         const auto found = std::find_if(list.begin(), list.end(), [&](const T& x) { return x.id == id; });
-        if (found != list.end())
-            return &*found;
+        if (found != list.end()) return &*found;
         refuse("the id " + JsonValue::of(id).shown(), "one that is there");
         return nullptr;
     }
     Node* node(const Id& id) {
         Node* found = find_node(d_.criteria, id);
-        if (found == nullptr)
-            refuse("the id " + JsonValue::of(id).shown(), "a criterion that is there");
+        if (found == nullptr) refuse("the id " + JsonValue::of(id).shown(), "a criterion that is there");
         return found;
     }
 
@@ -191,8 +174,7 @@ private:
     }
 
     void refuse_if_on_record(const Option*, const Id& id) {
-        if (d_.outcome && d_.outcome->option == id)
-            refuse("an option that the outcome names", "another one");
+        if (d_.outcome && d_.outcome->option == id) refuse("an option that the outcome names", "another one");
     }
     void refuse_if_on_record(const Requirement*, const Id&) {}
     void refuse_if_on_record(const Person*, const Id& id) {
@@ -233,8 +215,7 @@ bool changes_structure(const Edit& edit) {
 }
 
 void add_count(std::string& text, std::size_t count, const char* one, const char* many) {
-    if (count == 0)
-        return;
+    if (count == 0) return;
     text += (text.empty() ? "" : ", ") + std::to_string(count) + " " + (count == 1 ? one : many);
 }
 
@@ -260,10 +241,8 @@ std::string sentence(const Losses& losses) {
     add_count(text, losses.grades, "grade", "grades");
     add_count(text, losses.requirements, "must", "musts");
     add_count(text, losses.checks, "check", "checks");
-    if (text.empty())
-        return text;
-    if (const auto comma = text.rfind(", "); comma != std::string::npos)
-        text.replace(comma, 2, " and ");
+    if (text.empty()) return text;
+    if (const auto comma = text.rfind(", "); comma != std::string::npos) text.replace(comma, 2, " and ");
     const std::size_t all = losses.judgments + losses.points + losses.figures + losses.costs + losses.grades +
                             losses.requirements + losses.checks;
     return text + (all == 1 ? " goes with it." : " go with it.");
@@ -279,8 +258,7 @@ Applied apply(const Decision& decision, const std::vector<Edit>& edits) {
             applied.problems = std::move(applier.problems_);
             return applied;
         }
-        if (changes_structure(edit))
-            applied.losses += prune(applied.decision, decision);
+        if (changes_structure(edit)) applied.losses += prune(applied.decision, decision);
     }
     applied.problems = check(applied.decision).problems;
     return applied;

@@ -18,6 +18,9 @@ constexpr std::size_t longest_id = 64;
 constexpr int deepest_tree = 12;
 constexpr double largest_ratio = 100; ///< Beyond this a ratio is taken for a slip of the hand.
 constexpr double scale_end = 9;       ///< Saaty 1980: the scale runs from 1/9 to 9.
+constexpr std::size_t longest_list =
+    500; ///< Options, or children of one criterion: beyond this no set can be worked with.
+constexpr std::size_t largest_pairs = 100; ///< Items of a set that judgments may compare.
 constexpr int most_years = 200;
 constexpr int most_trials = 10'000'000;
 
@@ -75,8 +78,7 @@ private:
     /// Takes an id into `known`, refusing what is too long, repeated or, in a decision made here, empty.
     void take_id(std::set<Id>& known, const Id& id, const std::string& where, const char* what) {
         if (id.empty()) {
-            if (!unread_.any)
-                refuse(where + "/id", "an empty text", "an id of 1 to 64 bytes");
+            if (!unread_.any) refuse(where + "/id", "an empty text", "an id of 1 to 64 bytes");
             return;
         }
         if (id.size() > longest_id) {
@@ -87,12 +89,18 @@ private:
         }
     }
 
+    void few_enough(std::size_t count, const std::string& where, const char* what) {
+        if (count <= longest_list) return;
+        refuse(where, std::to_string(count) + " " + what, "at most " + std::to_string(longest_list));
+    }
+
     void collect_ids() {
         for (std::size_t i = 0; i < d_.people.size(); ++i)
             take_id(people_, d_.people[i].id, at("people", i), "person");
         for (std::size_t i = 0; i < d_.options.size(); ++i) {
             take_id(options_, d_.options[i].id, at("options", i), "option");
         }
+        few_enough(d_.options.size(), "/options", "options");
         placed_ = placed_nodes(d_.criteria);
         for (const auto& placed : placed_) {
             take_id(nodes_, placed.node->id, placed.pointer, "criterion");
@@ -106,20 +114,16 @@ private:
     /// True where `id` may be used further: it is known, or nothing can be said of it.
     bool refer(const std::set<Id>& known, bool unsure, const Id& id, const std::string& where,
                const char* what) {
-        if (id.empty() && unread_.any)
-            return false;
-        if (known.contains(id))
-            return true;
-        if (!unsure)
-            refuse(where, quoted(id), std::string("the id of ") + what);
+        if (id.empty() && unread_.any) return false;
+        if (known.contains(id)) return true;
+        if (!unsure) refuse(where, quoted(id), std::string("the id of ") + what);
         return false;
     }
     bool refer_option(const Id& id, const std::string& where) {
         return refer(options_, unread_.options, id, where, "an option");
     }
     void refer_person_or_room(const Id& by, const std::string& where) {
-        if (!by.empty())
-            refer(people_, unread_.people, by, where, "a person");
+        if (!by.empty()) refer(people_, unread_.people, by, where, "a person");
     }
     const Node* node(const Id& id) const {
         const auto found = by_id_.find(id);
@@ -128,11 +132,9 @@ private:
 
     /// The leaf rated in the given way, or null with a problem.
     const Node* refer_leaf(const Id& id, RateBy rate, const std::string& where, const char* what) {
-        if (!refer(nodes_, unread_.nodes, id, where, what))
-            return nullptr;
+        if (!refer(nodes_, unread_.nodes, id, where, what)) return nullptr;
         const Node* leaf = node(id);
-        if (leaf->is_leaf() && leaf->rate == rate)
-            return leaf;
+        if (leaf->is_leaf() && leaf->rate == rate) return leaf;
         refuse(where, quoted(id), std::string("the id of ") + what);
         return nullptr;
     }
@@ -153,11 +155,11 @@ private:
         for (const auto& [node, parent, depth, pointer] : placed_) {
             if (depth == deepest_tree + 1)
                 refuse(pointer, "a criterion at depth 13", "a tree at most 12 deep");
-            if (node->curve)
-                curve(*node->curve, pointer + "/curve");
-            if (node->cost_sheet)
-                cost_sheet(*node->cost_sheet, pointer + "/cost_sheet");
-            std::set<Id> grades;
+            if (node->curve) curve(*node->curve, pointer + "/curve");
+            if (node->cost_sheet) cost_sheet(*node->cost_sheet, pointer + "/cost_sheet");
+            few_enough(node->children.size(), pointer + "/children", "children");
+            few_enough(node->grades.size(), pointer + "/grades", "grades");
+            std::set<Id>& grades = grades_[node->id];
             for (std::size_t i = 0; i < node->grades.size(); ++i) {
                 const std::string where = pointer + "/grades/" + std::to_string(i);
                 take_id(grades, node->grades[i].id, where, "grade here");
@@ -192,8 +194,7 @@ private:
             refuse(where + "/years", std::to_string(sheet.years), "a whole number from 1 to 200");
         }
         number_over(sheet.discount, -1, false, where + "/discount", "a rate above -1");
-        if (sheet.volume)
-            number_over(*sheet.volume, 0, false, where + "/volume", "a number above 0");
+        if (sheet.volume) number_over(*sheet.volume, 0, false, where + "/volume", "a number above 0");
     }
 
     void people() {
@@ -213,38 +214,32 @@ private:
         }
     }
 
-    const std::vector<Id>& items_of(const Id& set) {
+    const std::set<Id>& items_of(const Id& set) {
         auto found = items_.find(set);
-        if (found == items_.end())
-            found = items_.emplace(set, set_items(d_, set)).first;
+        if (found == items_.end()) {
+            const auto items = set_items(d_, set);
+            found = items_.emplace(set, std::set<Id>(items.begin(), items.end())).first;
+        }
         return found->second;
     }
 
     /// True where the items of `set` can be looked at; a problem where it is no set.
     bool refer_set(const Id& set, const std::string& where) {
-        if (!refer(nodes_, unread_.nodes, set, where, "a set of pairs"))
-            return false;
+        if (!refer(nodes_, unread_.nodes, set, where, "a set of pairs")) return false;
         const Node* n = node(set);
         const bool of_options = n->is_leaf() && n->rate == RateBy::pairs;
         const bool of_grades = n->is_leaf() && n->rate == RateBy::grade && n->worths == WorthsBy::pairs;
-        if (of_options && unread_.options)
-            return false;
-        if (of_grades && unread_.grades)
-            return false;
-        if (!n->is_leaf() && unread_.nodes)
-            return false;
-        if (!n->is_leaf() || of_options || of_grades)
-            return true;
+        if (of_options && unread_.options) return false;
+        if (of_grades && unread_.grades) return false;
+        if (!n->is_leaf() && unread_.nodes) return false;
+        if (!n->is_leaf() || of_options || of_grades) return true;
         refuse(where, quoted(set), "the id of a set of pairs");
         return false;
     }
 
     bool refer_item(const Id& set, const Id& item, const std::string& where) {
-        if (item.empty() && unread_.any)
-            return false;
-        const auto& items = items_of(set);
-        if (std::find(items.begin(), items.end(), item) != items.end())
-            return true;
+        if (item.empty() && unread_.any) return false;
+        if (items_of(set).contains(item)) return true;
         refuse(where, quoted(item), "an item of the set " + quoted(set));
         return false;
     }
@@ -254,6 +249,11 @@ private:
             const Judgment& j = d_.judgments[i];
             refer_person_or_room(j.by, at("judgments", i, "/by"));
             if (refer_set(j.set, at("judgments", i, "/set"))) {
+                if (items_of(j.set).size() > largest_pairs) {
+                    refuse(at("judgments", i, "/set"),
+                           "a set of " + std::to_string(items_of(j.set).size()) + " items",
+                           "at most " + std::to_string(largest_pairs) + " items to compare in pairs");
+                }
                 const bool a = refer_item(j.set, j.a, at("judgments", i, "/a"));
                 const bool b = refer_item(j.set, j.b, at("judgments", i, "/b"));
                 if (a && b && j.a == j.b)
@@ -264,8 +264,7 @@ private:
         for (std::size_t i = 0; i < d_.finished.size(); ++i) {
             const Finished& f = d_.finished[i];
             refer_person_or_room(f.by, at("finished", i, "/by"));
-            if (!refer_set(f.set, at("finished", i, "/set")))
-                continue;
+            if (!refer_set(f.set, at("finished", i, "/set"))) continue;
             for (std::size_t k = 0; k < f.skipped.size(); ++k) {
                 const std::string where = at("finished", i, "/skipped/") + std::to_string(k);
                 const bool a = refer_item(f.set, f.skipped[k][0], where + "/0");
@@ -278,8 +277,7 @@ private:
     }
 
     void ratio(double ratio, const std::string& where) {
-        if (!is_read(ratio))
-            return;
+        if (!is_read(ratio)) return;
         if (ratio < 1 / largest_ratio || ratio > largest_ratio) {
             refuse(where, shown(ratio), "a ratio from 1/100 to 100");
         } else if (ratio > scale_end * (1 + rounding) || ratio * scale_end < 1 - rounding) {
@@ -306,15 +304,14 @@ private:
                 refuse(at("points", i, "/set"), quoted(p.set), "the id of a criterion with children");
                 continue;
             }
-            if (unread_.nodes)
-                continue;
+            if (unread_.nodes) continue;
             for (const auto& [id, value] : p.points) {
                 refer_item(p.set, id, at("points", i, "/points") + pointer_part(id));
             }
+            std::set<Id> named;
+            for (const auto& [id, value] : p.points) named.insert(id);
             for (const auto& child : set->children) {
-                const bool named = std::any_of(p.points.begin(), p.points.end(),
-                                               [&](const auto& entry) { return entry.first == child.id; });
-                if (!named && read_whole(at("points", i))) {
+                if (!named.contains(child.id) && read_whole(at("points", i))) {
                     refuse(at("points", i, "/points"), "no points for " + quoted(child.id),
                            "points for every item");
                 }
@@ -327,8 +324,7 @@ private:
 
     void range(const std::optional<double>& low, const std::optional<double>& value,
                const std::optional<double>& high, const std::string& where) {
-        if (low && value && *low > *value)
-            refuse(where + "/low", shown(*low), "a number not above value");
+        if (low && value && *low > *value) refuse(where + "/low", shown(*low), "a number not above value");
         if (high && value && *value > *high)
             refuse(where + "/high", shown(*high), "a number not below value");
         if (!value && low && high && *low > *high)
@@ -344,8 +340,7 @@ private:
             range(f.low, f.value, f.high, at("figures", i));
             if (f.round && *f.round < 1)
                 refuse(at("figures", i, "/round"), shown(*f.round), "a round from 1");
-            if (leaf != nullptr)
-                figure_notices(*leaf, f, at("figures", i));
+            if (leaf != nullptr) figure_notices(*leaf, f, at("figures", i));
         }
         for (std::size_t i = 0; i < d_.costs.size(); ++i) {
             const Cost& c = d_.costs[i];
@@ -375,15 +370,14 @@ private:
             refer_option(g.option, at("grades", i, "/option"));
             refer_person_or_room(g.by, at("grades", i, "/by"));
             if (leaf != nullptr && !g.grade.empty() && !unread_.grades &&
-                find_grade(*leaf, g.grade) == nullptr) {
+                !grades_[leaf->id].contains(g.grade)) {
                 refuse(at("grades", i, "/grade"), quoted(g.grade), "a grade of " + quoted(leaf->id));
             }
         }
     }
 
     void figure_notices(const Node& leaf, const Figure& f, const std::string& where) {
-        if (unread_.any)
-            return; // The file is refused anyway, and its anchors may not be numbers.
+        if (unread_.any) return; // The file is refused anyway, and its anchors may not be numbers.
         if (leaf.cost_sheet) {
             notice("figure-unused", "This figure does not count: its criterion has a cost sheet.", where);
         } else if (leaf.curve && f.value) {
@@ -409,8 +403,7 @@ private:
             if (!r.criterion.empty()) {
                 refer_leaf(r.criterion, RateBy::figure, where("/criterion"), "a criterion rated by figures");
             }
-            if (!r.node.empty())
-                refer(nodes_, unread_.nodes, r.node, where("/node"), "a criterion");
+            if (!r.node.empty()) refer(nodes_, unread_.nodes, r.node, where("/node"), "a criterion");
             if (!r.criterion.empty() && !r.node.empty()) {
                 refuse(where("/node"), "a node beside a criterion", "one of them");
             }
@@ -424,8 +417,7 @@ private:
             if (r.at_least && r.at_most && *r.at_least > *r.at_most) {
                 refuse(where("/at_least"), shown(*r.at_least), "a number not above at_most");
             }
-            if (r.waived)
-                refer_person_or_room(r.waived->by, where("/waived/by"));
+            if (r.waived) refer_person_or_room(r.waived->by, where("/waived/by"));
         }
         for (std::size_t i = 0; i < d_.checks.size(); ++i) {
             const Check& c = d_.checks[i];
@@ -451,11 +443,9 @@ private:
     }
 
     void records() {
-        if (d_.rules)
-            refer_person_or_room(d_.rules->by, "/rules/by");
+        if (d_.rules) refer_person_or_room(d_.rules->by, "/rules/by");
         if (d_.outcome) {
-            if (!d_.outcome->option.empty())
-                refer_option(d_.outcome->option, "/outcome/option");
+            if (!d_.outcome->option.empty()) refer_option(d_.outcome->option, "/outcome/option");
             for (std::size_t i = 0; i < d_.outcome->by.size(); ++i) {
                 refer(people_, unread_.people, d_.outcome->by[i], "/outcome/by/" + std::to_string(i),
                       "a person");
@@ -478,7 +468,8 @@ private:
     std::set<Id> requirements_;
     std::vector<PlacedNode> placed_;
     std::map<Id, const Node*> by_id_;
-    std::map<Id, std::vector<Id>> items_;
+    std::map<Id, std::set<Id>> items_;
+    std::map<Id, std::set<Id>> grades_; ///< Of each leaf.
 };
 
 } // namespace

@@ -58,8 +58,7 @@ struct Describer {
     std::string operator()(const Change<T>& e) const {
         const std::string before = quoted(old_name(d, &e.value, e.value.id));
         const std::string what(noun(&e.value));
-        if (before != shown(e.value))
-            return "Renamed " + what + " " + before + " to " + shown(e.value);
+        if (before != shown(e.value)) return "Renamed " + what + " " + before + " to " + shown(e.value);
         return "Changed " + what + " " + before;
     }
     template<class T>
@@ -75,8 +74,7 @@ struct Describer {
     std::string operator()(const AddNode& e) const { return "Added criterion " + shown(e.node); }
     std::string operator()(const ChangeNode& e) const {
         const std::string before = quoted(node_name(d, e.node.id));
-        if (before != shown(e.node))
-            return "Renamed criterion " + before + " to " + shown(e.node);
+        if (before != shown(e.node)) return "Renamed criterion " + before + " to " + shown(e.node);
         return "Changed criterion " + before;
     }
     std::string operator()(const MoveNode& e) const {

@@ -20,16 +20,13 @@ History::Outcome History::apply(const std::vector<Edit>& edits, const Stamp& sta
     Outcome outcome;
     Applied applied = steelyard::apply(*now_, edits);
     outcome.problems = std::move(applied.problems);
-    if (!outcome.problems.empty() || applied.decision == *now_)
-        return outcome;
+    if (!outcome.problems.empty() || applied.decision == *now_) return outcome;
     outcome.losses = applied.losses;
     outcome.changed = true;
-    if (label.empty())
-        label = describe(edits.front(), *now_);
+    if (label.empty()) label = describe(edits.front(), *now_);
     write_log(applied.decision, stamp, label);
     undo_.push_back({now_, std::move(label)});
-    if (undo_.size() > most_steps)
-        undo_.pop_front();
+    if (undo_.size() > most_steps) undo_.pop_front();
     redo_.clear();
     now_ = std::make_shared<const Decision>(std::move(applied.decision));
     ++revision_;
@@ -44,8 +41,7 @@ bool History::redo(const Stamp& stamp) {
 }
 
 bool History::step(std::deque<Step>& from, std::deque<Step>& to, const Stamp& stamp, const char* verb) {
-    if (from.empty())
-        return false;
+    if (from.empty()) return false;
     Step taken = std::move(from.back());
     from.pop_back();
     Decision next = *taken.other;

@@ -13,27 +13,13 @@ void append_quoted(std::string& out, std::string_view text) {
     out += '"';
     for (const char c : text) {
         switch (c) {
-        case '"':
-            out += "\\\"";
-            break;
-        case '\\':
-            out += "\\\\";
-            break;
-        case '\b':
-            out += "\\b";
-            break;
-        case '\f':
-            out += "\\f";
-            break;
-        case '\n':
-            out += "\\n";
-            break;
-        case '\r':
-            out += "\\r";
-            break;
-        case '\t':
-            out += "\\t";
-            break;
+        case '"': out += "\\\""; break;
+        case '\\': out += "\\\\"; break;
+        case '\b': out += "\\b"; break;
+        case '\f': out += "\\f"; break;
+        case '\n': out += "\\n"; break;
+        case '\r': out += "\\r"; break;
+        case '\t': out += "\\t"; break;
         default:
             if (static_cast<unsigned char>(c) < 0x20) {
                 out += "\\u00";
@@ -49,11 +35,9 @@ void append_quoted(std::string& out, std::string_view text) {
 
 /// At most 60 bytes of a text, whole UTF-8 characters.
 std::string cut(const std::string& text) {
-    if (text.size() <= 60)
-        return text;
+    if (text.size() <= 60) return text;
     std::size_t end = 57;
-    while (end > 0 && (static_cast<unsigned char>(text[end]) & 0xc0) == 0x80)
-        --end;
+    while (end > 0 && (static_cast<unsigned char>(text[end]) & 0xc0) == 0x80) --end;
     return text.substr(0, end) + "...";
 }
 
@@ -76,45 +60,32 @@ void append(std::string& out, const JsonValue& value, int indent, bool pretty) {
         }
     };
     switch (value.kind) {
-    case JsonValue::Kind::null:
-        out += "null";
-        break;
-    case JsonValue::Kind::boolean:
-        out += value.truth ? "true" : "false";
-        break;
-    case JsonValue::Kind::number:
-        out += value.text;
-        break;
-    case JsonValue::Kind::string:
-        append_quoted(out, value.text);
-        break;
+    case JsonValue::Kind::null: out += "null"; break;
+    case JsonValue::Kind::boolean: out += value.truth ? "true" : "false"; break;
+    case JsonValue::Kind::number: out += value.text; break;
+    case JsonValue::Kind::string: append_quoted(out, value.text); break;
     case JsonValue::Kind::array: {
         const bool one_line = fits_one_line(value);
         out += '[';
         for (std::size_t i = 0; i < value.items.size(); ++i) {
-            if (i > 0)
-                out += pretty && one_line ? ", " : ",";
-            if (!one_line)
-                line(indent + 1);
+            if (i > 0) out += pretty && one_line ? ", " : ",";
+            if (!one_line) line(indent + 1);
             append(out, value.items[i], indent + 1, pretty);
         }
-        if (!one_line)
-            line(indent);
+        if (!one_line) line(indent);
         out += ']';
         break;
     }
     case JsonValue::Kind::object: {
         out += '{';
         for (std::size_t i = 0; i < value.members.size(); ++i) {
-            if (i > 0)
-                out += ',';
+            if (i > 0) out += ',';
             line(indent + 1);
             append_quoted(out, value.members[i].first);
             out += pretty ? ": " : ":";
             append(out, value.members[i].second, indent + 1, pretty);
         }
-        if (!value.members.empty())
-            line(indent);
+        if (!value.members.empty()) line(indent);
         out += '}';
         break;
     }
@@ -164,26 +135,19 @@ JsonValue& JsonValue::add(std::string name, JsonValue value) {
 
 const JsonValue* JsonValue::find(std::string_view name) const {
     for (const auto& [key, value] : members) {
-        if (key == name)
-            return &value;
+        if (key == name) return &value;
     }
     return nullptr;
 }
 
 std::string JsonValue::shown() const {
     switch (kind) {
-    case Kind::null:
-        return "null";
-    case Kind::boolean:
-        return truth ? "true" : "false";
-    case Kind::number:
-        return cut(text);
-    case Kind::array:
-        return "an array";
-    case Kind::object:
-        return "an object";
-    case Kind::string:
-        break;
+    case Kind::null: return "null";
+    case Kind::boolean: return truth ? "true" : "false";
+    case Kind::number: return cut(text);
+    case Kind::array: return "an array";
+    case Kind::object: return "an object";
+    case Kind::string: break;
     }
     std::string quoted;
     append_quoted(quoted, cut(text));

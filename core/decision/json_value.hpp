@@ -42,7 +42,8 @@ struct JsonValue {
 /// Bounds kept while parsing, so that a hostile text costs no more than it must.
 struct JsonLimits {
     std::size_t bytes = std::size_t{16} << 20;
-    std::size_t depth = 64;                   ///< Nested arrays and objects; the outermost is 1.
+    std::size_t depth = 64;         ///< Nested arrays and objects; the outermost is 1.
+    std::size_t values = 1'000'000; ///< Of all kinds together; each takes memory, however short its text.
     std::size_t text = std::size_t{64} << 10; ///< UTF-8 bytes of one string or member name.
 };
 

@@ -14,8 +14,7 @@ const T* find_in(const std::vector<T>& list, const Id& id) {
 template<class T>
 std::vector<Id> ids_of(const std::vector<T>& list) {
     std::vector<Id> ids;
-    for (const auto& x : list)
-        ids.push_back(x.id);
+    for (const auto& x : list) ids.push_back(x.id);
     return ids;
 }
 
@@ -48,11 +47,9 @@ const Grade* find_grade(const Node& leaf, const Id& id) {
 }
 
 const Node* find_node(const Node& root, const Id& id) {
-    if (root.id == id)
-        return &root;
+    if (root.id == id) return &root;
     for (const auto& child : root.children) {
-        if (const auto* found = find_node(child, id))
-            return found;
+        if (const auto* found = find_node(child, id)) return found;
     }
     return nullptr;
 }
@@ -63,10 +60,8 @@ Node* find_node(Node& root, const Id& id) {
 
 const Node* find_parent(const Node& root, const Id& id) {
     for (const auto& child : root.children) {
-        if (child.id == id)
-            return &root;
-        if (const auto* found = find_parent(child, id))
-            return found;
+        if (child.id == id) return &root;
+        if (const auto* found = find_parent(child, id)) return found;
     }
     return nullptr;
 }
@@ -80,22 +75,17 @@ std::vector<PlacedNode> placed_nodes(const Node& root) {
 std::vector<const Node*> leaves(const Node& root) {
     std::vector<const Node*> out;
     for (const auto& placed : placed_nodes(root)) {
-        if (placed.node->is_leaf())
-            out.push_back(placed.node);
+        if (placed.node->is_leaf()) out.push_back(placed.node);
     }
     return out;
 }
 
 std::vector<Id> set_items(const Decision& decision, const Id& set) {
     const Node* node = find_node(decision.criteria, set);
-    if (node == nullptr)
-        return {};
-    if (!node->is_leaf())
-        return ids_of(node->children);
-    if (node->rate == RateBy::pairs)
-        return ids_of(decision.options);
-    if (node->rate == RateBy::grade && node->worths == WorthsBy::pairs)
-        return ids_of(node->grades);
+    if (node == nullptr) return {};
+    if (!node->is_leaf()) return ids_of(node->children);
+    if (node->rate == RateBy::pairs) return ids_of(decision.options);
+    if (node->rate == RateBy::grade && node->worths == WorthsBy::pairs) return ids_of(node->grades);
     return {};
 }
 
@@ -114,8 +104,7 @@ std::string requirement_name(const Decision& decision, const Id& id) {
 
 std::string item_name(const Decision& decision, const Id& set, const Id& item) {
     const Node* node = find_node(decision.criteria, set);
-    if (node == nullptr || !node->is_leaf())
-        return node_name(decision, item);
+    if (node == nullptr || !node->is_leaf()) return node_name(decision, item);
     return node->rate == RateBy::grade ? shown(find_grade(*node, item), item) : option_name(decision, item);
 }
 

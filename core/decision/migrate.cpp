@@ -11,8 +11,7 @@ const std::vector<Migration>& migrations() {
 
 JsonValue migrate(JsonValue file, int version) {
     for (const auto& migration : migrations()) {
-        if (migration.from >= version)
-            file = migration.step(std::move(file));
+        if (migration.from >= version) file = migration.step(std::move(file));
     }
     return file;
 }

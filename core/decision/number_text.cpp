@@ -20,8 +20,7 @@ Digits digits_of(double positive, int count) {
     Digits result;
     const char* p = buffer;
     for (; *p != '\0' && *p != 'e'; ++p) {
-        if (*p >= '0' && *p <= '9')
-            result.digits += *p;
+        if (*p >= '0' && *p <= '9') result.digits += *p;
     }
     result.exponent = std::atoi(p + 1);
     return result;
@@ -53,11 +52,9 @@ Digits next_up(Digits d) {
 /// well.
 std::optional<Digits> reading_back(double positive, int count) {
     const Digits rounded = digits_of(positive, count);
-    if (value_of(rounded) == positive)
-        return rounded;
+    if (value_of(rounded) == positive) return rounded;
     const Digits up = next_up(rounded);
-    if (value_of(up) == positive)
-        return up;
+    if (value_of(up) == positive) return up;
     return std::nullopt;
 }
 
@@ -67,8 +64,7 @@ Digits shortest(double positive) {
     const int from = positive < 2.3e-308 ? 1 : 15;
     for (int count = from; count < 17; ++count) {
         if (auto found = reading_back(positive, count)) {
-            while (found->digits.size() > 1 && found->digits.back() == '0')
-                found->digits.pop_back();
+            while (found->digits.size() > 1 && found->digits.back() == '0') found->digits.pop_back();
             return *found;
         }
     }
@@ -78,16 +74,14 @@ Digits shortest(double positive) {
 } // namespace
 
 std::string shortest_number(double number) {
-    if (number == 0)
-        return "0";
+    if (number == 0) return "0";
     const Digits d = shortest(std::abs(number));
     const int k = static_cast<int>(d.digits.size());
     const int n = d.exponent + 1; // The decimal point stands after the n-th digit.
     std::string text = number < 0 ? "-" : "";
     if (n > 21 || n <= -6) {
         text += d.digits.substr(0, 1);
-        if (k > 1)
-            text += "." + d.digits.substr(1);
+        if (k > 1) text += "." + d.digits.substr(1);
         text += n - 1 < 0 ? "e-" : "e+";
         text += std::to_string(std::abs(n - 1));
     } else if (n >= k) {

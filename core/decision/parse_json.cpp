@@ -47,8 +47,7 @@ public:
         level.name = name;
         level.named = true;
         level.skip = !level.names.insert(name).second;
-        if (level.skip)
-            refuse(place(), "a member name that stands here twice", "each name once");
+        if (level.skip) refuse(place(), "a member name that stands here twice", "each name once");
         if (name.size() > limits_.text) {
             refuse(levels_place(levels_.size() - 1),
                    "a member name of " + std::to_string(name.size()) + " bytes",
@@ -121,6 +120,10 @@ private:
     }
 
     bool put(JsonValue value) {
+        if (++values_ > limits_.values) {
+            refuse("", "more than " + std::to_string(limits_.values) + " values", "fewer");
+            return false;
+        }
         if (levels_.empty()) {
             out_.value = std::move(value);
             return true;
@@ -153,12 +156,12 @@ private:
 
     ParsedJson& out_;
     JsonLimits limits_;
+    std::size_t values_ = 0;
     std::vector<Level> levels_;
 };
 
 bool looks_like_utf16(std::string_view text) {
-    if (text.size() < 2)
-        return false;
+    if (text.size() < 2) return false;
     const auto a = static_cast<unsigned char>(text[0]);
     const auto b = static_cast<unsigned char>(text[1]);
     return (a == 0xff && b == 0xfe) || (a == 0xfe && b == 0xff) || a == 0 || b == 0;

@@ -11,8 +11,7 @@ namespace {
 template<class T>
 std::set<Id> ids_of(const std::vector<T>& list) {
     std::set<Id> ids;
-    for (const auto& x : list)
-        ids.insert(x.id);
+    for (const auto& x : list) ids.insert(x.id);
     return ids;
 }
 
@@ -48,8 +47,7 @@ private:
             return !r.node.empty() && find_node(d_.criteria, r.node) == nullptr;
         });
         for (auto& r : d_.requirements) {
-            if (!r.criterion.empty() && !rated(r.criterion, RateBy::figure))
-                r.criterion.clear();
+            if (!r.criterion.empty() && !rated(r.criterion, RateBy::figure)) r.criterion.clear();
         }
         const auto requirements = ids_of(d_.requirements);
         losses_.checks += std::erase_if(d_.checks, [&](const Check& c) {
@@ -82,11 +80,9 @@ private:
         }
         losses_.points += std::erase_if(d_.points, [&](const PointsEntry& entry) {
             const Node* node = find_node(d_.criteria, entry.set);
-            if (!known_or_room(entry.by) || node == nullptr || node->is_leaf())
-                return true;
+            if (!known_or_room(entry.by) || node == nullptr || node->is_leaf()) return true;
             double sum = 0;
-            for (const auto& [id, points] : entry.points)
-                sum += points;
+            for (const auto& [id, points] : entry.points) sum += points;
             return entry.points.size() != node->children.size() || sum <= 0;
         });
     }

@@ -26,10 +26,8 @@ template<class Enum>
 std::string words_of() {
     std::string text;
     for (const auto w : Words<Enum>::list) {
-        if (w.empty())
-            continue;
-        if (!text.empty())
-            text += w == Words<Enum>::list.back() ? " or " : ", ";
+        if (w.empty()) continue;
+        if (!text.empty()) text += w == Words<Enum>::list.back() ? " or " : ", ";
         text += "\"" + std::string(w) + "\"";
     }
     return text;
@@ -59,8 +57,7 @@ public:
             if (!reader.known_.contains(name))
                 object.extras.unknown.push_back({name, write_json_compact(member)});
         }
-        if (reader.bad_id_)
-            mark_list<T>(unread);
+        if (reader.bad_id_) mark_list<T>(unread);
     }
 
     void format() {
@@ -73,39 +70,32 @@ public:
         if (const auto* value = needed(name)) {
             if (value->kind == Kind::string) {
                 id = value->text;
-                if (id.empty())
-                    refuse(place(name), "an empty text", "an id of 1 to 64 bytes");
+                if (id.empty()) refuse(place(name), "an empty text", "an id of 1 to 64 bytes");
             } else {
                 refuse(place(name), value->shown(), "a text");
             }
         }
-        if (id.empty() && std::string_view(name) == "id")
-            bad_id_ = true;
+        if (id.empty() && std::string_view(name) == "id") bad_id_ = true;
     }
     void maybe_id(const char* name, Id& id) {
-        if (!given(name))
-            return;
+        if (!given(name)) return;
         if (const auto* value = typed(name, Kind::string, "a text")) {
             id = value->text;
-            if (id.empty())
-                refuse(place(name), "an empty text", "an id of 1 to 64 bytes");
+            if (id.empty()) refuse(place(name), "an empty text", "an id of 1 to 64 bytes");
         }
     }
     void needed_text(const char* name, std::string& out) {
-        if (needed(name) != nullptr)
-            text(name, out);
+        if (needed(name) != nullptr) text(name, out);
     }
     void text(const char* name, std::string& out) {
         if (const auto* value = typed(name, Kind::string, "a text")) {
             out = value->text;
-            if (out.empty())
-                stated_.emplace_back(name);
+            if (out.empty()) stated_.emplace_back(name);
         }
     }
     void person_or_room(const char* name, Id& by) {
         const auto* value = given(name);
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         if (value->kind == Kind::null) {
             stated_.emplace_back(name);
         } else if (value->kind == Kind::string && !value->text.empty()) {
@@ -116,30 +106,24 @@ public:
     }
     void number(const char* name, double& out) {
         out = not_read;
-        if (needed(name) == nullptr)
-            return;
-        if (const auto* value = typed(name, Kind::number, "a number"))
-            out = value->number;
+        if (needed(name) == nullptr) return;
+        if (const auto* value = typed(name, Kind::number, "a number")) out = value->number;
     }
     void number_or(const char* name, double& out, double usual) {
         out = usual;
-        if (given(name) == nullptr)
-            return;
+        if (given(name) == nullptr) return;
         const auto* value = typed(name, Kind::number, "a number");
         out = value != nullptr ? value->number : not_read;
-        if (out == usual)
-            stated_.emplace_back(name);
+        if (out == usual) stated_.emplace_back(name);
     }
     void maybe_number(const char* name, std::optional<double>& out) {
-        if (const auto* value = typed(name, Kind::number, "a number"))
-            out = value->number;
+        if (const auto* value = typed(name, Kind::number, "a number")) out = value->number;
     }
     void count_or(const char* name, int& out, int usual) {
         out = usual;
         if (const auto whole = whole_number(name, std::numeric_limits<int>::max())) {
             out = static_cast<int>(*whole);
-            if (out == usual)
-                stated_.emplace_back(name);
+            if (out == usual) stated_.emplace_back(name);
         }
     }
     void maybe_count(const char* name, std::optional<int>& out) {
@@ -149,15 +133,13 @@ public:
     void seed(const char* name, std::uint64_t& out) {
         if (const auto whole = whole_number(name, largest_exact_integer)) {
             out = static_cast<std::uint64_t>(*whole);
-            if (out == 1)
-                stated_.emplace_back(name);
+            if (out == 1) stated_.emplace_back(name);
         }
     }
     void flag(const char* name, bool& out) {
         if (const auto* value = typed(name, Kind::boolean, "true or false")) {
             out = value->truth;
-            if (!out)
-                stated_.emplace_back(name);
+            if (!out) stated_.emplace_back(name);
         }
     }
     template<class Enum>
@@ -170,37 +152,30 @@ public:
     }
     template<class Enum>
     void needed_word(const char* name, Enum& out) {
-        if (const auto* value = needed(name))
-            word_in(*value, place(name), out);
+        if (const auto* value = needed(name)) word_in(*value, place(name), out);
     }
     template<class Enum>
     void words(const char* name, std::vector<Enum>& out) {
         const auto* value = typed(name, Kind::array, "an array");
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         out.clear();
         for (std::size_t i = 0; i < value->items.size(); ++i) {
             Enum one{};
-            if (word_in(value->items[i], place(name) + "/" + std::to_string(i), one))
-                out.push_back(one);
+            if (word_in(value->items[i], place(name) + "/" + std::to_string(i), one)) out.push_back(one);
         }
-        if (out == std::vector<Enum>{Enum{}})
-            stated_.emplace_back(name);
+        if (out == std::vector<Enum>{Enum{}}) stated_.emplace_back(name);
     }
     void ids(const char* name, std::vector<Id>& out) {
         const auto* value = typed(name, Kind::array, "an array");
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         for (std::size_t i = 0; i < value->items.size(); ++i) {
             out.push_back(id_in(value->items[i], place(name) + "/" + std::to_string(i)));
         }
-        if (out.empty())
-            stated_.emplace_back(name);
+        if (out.empty()) stated_.emplace_back(name);
     }
     void id_pairs(const char* name, std::vector<std::array<Id, 2>>& out) {
         const auto* value = typed(name, Kind::array, "an array");
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         for (std::size_t i = 0; i < value->items.size(); ++i) {
             const auto& pair = value->items[i];
             const std::string at = place(name) + "/" + std::to_string(i);
@@ -211,15 +186,12 @@ public:
                 out.push_back({id_in(pair.items[0], at + "/0"), id_in(pair.items[1], at + "/1")});
             }
         }
-        if (out.empty())
-            stated_.emplace_back(name);
+        if (out.empty()) stated_.emplace_back(name);
     }
     void numbers_by_id(const char* name, std::vector<std::pair<Id, double>>& out) {
-        if (needed(name) == nullptr)
-            return;
+        if (needed(name) == nullptr) return;
         const auto* value = typed(name, Kind::object, "an object");
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         for (const auto& [id, number] : value->members) {
             if (number.kind != Kind::number)
                 refuse(place(name) + pointer_part(id), number.shown(), "a number");
@@ -229,8 +201,7 @@ public:
     template<class T>
     void list(const char* name, std::vector<T>& out) {
         const auto* value = given(name);
-        if (value == nullptr)
-            return;
+        if (value == nullptr) return;
         if (typed(name, Kind::array, "an array") == nullptr) {
             mark_list<T>(unread_);
             return;
@@ -239,8 +210,7 @@ public:
         for (std::size_t i = 0; i < out.size(); ++i) {
             read(value->items[i], place(name) + "/" + std::to_string(i), out[i], problems_, unread_);
         }
-        if (out.empty())
-            stated_.emplace_back(name);
+        if (out.empty()) stated_.emplace_back(name);
     }
     template<class T>
     void needed_list(const char* name, std::vector<T>& out) {
@@ -260,15 +230,13 @@ public:
     }
     template<class T>
     void maybe_object(const char* name, std::optional<T>& out) {
-        if (const auto* value = given(name))
-            read(*value, place(name), out.emplace(), problems_, unread_);
+        if (const auto* value = given(name)) read(*value, place(name), out.emplace(), problems_, unread_);
     }
     template<class T>
     void object(const char* name, T& out) {
         if (const auto* value = given(name)) {
             read(*value, place(name), out, problems_, unread_);
-            if (value->members.empty())
-                stated_.emplace_back(name);
+            if (value->members.empty()) stated_.emplace_back(name);
         }
     }
 
@@ -281,14 +249,12 @@ public:
         word("weights", node.weights);
         word("rate", node.rate);
         const char* usual = inner ? "weights" : "rate";
-        if (given(usual) == nullptr)
-            left_out_.emplace_back(usual);
+        if (given(usual) == nullptr) left_out_.emplace_back(usual);
     }
 
     void curve_shape(decltype(Curve::shape)& shape) {
         const auto* kind = needed("kind");
-        if (kind == nullptr)
-            return;
+        if (kind == nullptr) return;
         if (kind->kind != Kind::string) {
             refuse(place("kind"), kind->shown(), "a text");
         } else if (kind->text == "proportional") {
@@ -329,24 +295,17 @@ private:
     /// An id of this list is lost: references into the list cannot be judged.
     template<class T>
     static void mark_list(Unread& unread) {
-        if constexpr (std::same_as<T, Person>)
-            unread.people = true;
-        if constexpr (std::same_as<T, Option>)
-            unread.options = true;
-        if constexpr (std::same_as<T, Node>)
-            unread.nodes = true;
-        if constexpr (std::same_as<T, Grade>)
-            unread.grades = true;
-        if constexpr (std::same_as<T, Requirement>)
-            unread.requirements = true;
+        if constexpr (std::same_as<T, Person>) unread.people = true;
+        if constexpr (std::same_as<T, Option>) unread.options = true;
+        if constexpr (std::same_as<T, Node>) unread.nodes = true;
+        if constexpr (std::same_as<T, Grade>) unread.grades = true;
+        if constexpr (std::same_as<T, Requirement>) unread.requirements = true;
     }
 
     void curve_points(PointsCurve& curve) {
-        if (needed("at") == nullptr)
-            return;
+        if (needed("at") == nullptr) return;
         const auto* at = typed("at", Kind::array, "an array");
-        if (at == nullptr)
-            return;
+        if (at == nullptr) return;
         for (std::size_t i = 0; i < at->items.size(); ++i) {
             const auto& point = at->items[i];
             const bool good = point.kind == Kind::array && point.items.size() == 2 &&
@@ -377,23 +336,20 @@ private:
 
     const JsonValue* needed(const char* name) {
         const auto* value = given(name);
-        if (value == nullptr)
-            refuse(at_, "no member \"" + std::string(name) + "\"", "one");
+        if (value == nullptr) refuse(at_, "no member \"" + std::string(name) + "\"", "one");
         return value;
     }
 
     const JsonValue* typed(const char* name, Kind kind, const char* expected) {
         const auto* value = given(name);
-        if (value == nullptr || value->kind == kind)
-            return value;
+        if (value == nullptr || value->kind == kind) return value;
         refuse(place(name), value->shown(), expected);
         return nullptr;
     }
 
     std::optional<double> whole_number(const char* name, double largest) {
         const auto* value = typed(name, Kind::number, "a whole number");
-        if (value == nullptr)
-            return std::nullopt;
+        if (value == nullptr) return std::nullopt;
         if (std::floor(value->number) != value->number || value->number < 0 || value->number > largest) {
             refuse(place(name), value->shown(), "a whole number from 0 to " + JsonValue::of(largest).shown());
             return std::nullopt;
@@ -416,8 +372,7 @@ private:
     }
 
     Id id_in(const JsonValue& value, const std::string& at) {
-        if (value.kind == Kind::string && !value.text.empty())
-            return value.text;
+        if (value.kind == Kind::string && !value.text.empty()) return value.text;
         refuse(at, value.kind == Kind::string ? "an empty text" : value.shown(), "an id of 1 to 64 bytes");
         return {};
     }
@@ -474,12 +429,10 @@ ReadResult read_decision(std::string_view text) {
     ReadResult result;
     ParsedJson parsed = parse_json(text);
     result.problems = std::move(parsed.problems);
-    if (!parsed.whole)
-        return result;
+    if (!parsed.whole) return result;
 
     const Head head = read_head(parsed.value, result.problems);
-    if (!head.read_on)
-        return result;
+    if (!head.read_on) return result;
     const JsonValue file = migrate(std::move(parsed.value), head.version);
 
     Decision decision;
@@ -488,11 +441,9 @@ ReadResult read_decision(std::string_view text) {
     Reader::read(file, "", decision, result.problems, unread);
     Checked checked = check(decision, unread);
     for (auto& problem : checked.problems) {
-        if (result.problems.size() < max_problems)
-            result.problems.push_back(std::move(problem));
+        if (result.problems.size() < max_problems) result.problems.push_back(std::move(problem));
     }
-    if (!result.problems.empty())
-        return result;
+    if (!result.problems.empty()) return result;
     result.notices = std::move(checked.notices);
     result.decision = std::move(decision);
     return result;

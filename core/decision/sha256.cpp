@@ -40,8 +40,7 @@ void take_block(Words8& h, const unsigned char* block) {
         const auto maj = (v[0] & v[1]) ^ (v[0] & v[2]) ^ (v[1] & v[2]);
         v = {t1 + s0 + maj, v[0], v[1], v[2], v[3] + t1, v[4], v[5], v[6]};
     }
-    for (std::size_t i = 0; i < 8; ++i)
-        h[i] += v[i];
+    for (std::size_t i = 0; i < 8; ++i) h[i] += v[i];
 }
 
 } // namespace
@@ -50,25 +49,20 @@ std::string sha256_hex(std::string_view bytes) {
     Words8 h{0x6a09e667, 0xbb67ae85, 0x3c6ef372, 0xa54ff53a, 0x510e527f, 0x9b05688c, 0x1f83d9ab, 0x5be0cd19};
     const auto* data = reinterpret_cast<const unsigned char*>(bytes.data());
     std::size_t left = bytes.size();
-    for (; left >= 64; left -= 64, data += 64)
-        take_block(h, data);
+    for (; left >= 64; left -= 64, data += 64) take_block(h, data);
 
     std::array<unsigned char, 128> tail{};
-    for (std::size_t i = 0; i < left; ++i)
-        tail[i] = data[i];
+    for (std::size_t i = 0; i < left; ++i) tail[i] = data[i];
     tail[left] = 0x80;
     const std::size_t tail_size = left < 56 ? 64 : 128;
     const auto bits = static_cast<std::uint64_t>(bytes.size()) * 8;
-    for (std::size_t i = 0; i < 8; ++i)
-        tail[tail_size - 1 - i] = static_cast<unsigned char>(bits >> (8 * i));
-    for (std::size_t at = 0; at < tail_size; at += 64)
-        take_block(h, tail.data() + at);
+    for (std::size_t i = 0; i < 8; ++i) tail[tail_size - 1 - i] = static_cast<unsigned char>(bits >> (8 * i));
+    for (std::size_t at = 0; at < tail_size; at += 64) take_block(h, tail.data() + at);
 
     static constexpr char hex[] = "0123456789abcdef";
     std::string text;
     for (const auto x : h) {
-        for (int shift = 28; shift >= 0; shift -= 4)
-            text += hex[(x >> shift) & 0xf];
+        for (int shift = 28; shift >= 0; shift -= 4) text += hex[(x >> shift) & 0xf];
     }
     return text;
 }

@@ -16,6 +16,7 @@ public:
     template<class T>
     void walk(const T& object) {
         for (const auto& member : object.extras.unknown) {
+            if (notices_.size() == max_problems) return;
             notices_.push_back({"unknown-member",
                                 "The member \"" + member.name + "\" is not known here; it is kept as it is.",
                                 at_ + pointer_part(member.name)});
@@ -43,8 +44,7 @@ public:
     }
     template<class T>
     void maybe_object(const char* name, const std::optional<T>& object) {
-        if (object)
-            this->object(name, *object);
+        if (object) this->object(name, *object);
     }
 
     void format() {}

@@ -32,8 +32,7 @@ public:
     void maybe_id(const char* name, const Id& id) { text(name, id); }
     void needed_text(const char* name, const std::string& text) { out_.add(name, JsonValue::of(text)); }
     void text(const char* name, const std::string& text) {
-        if (!text.empty() || stated(name))
-            out_.add(name, JsonValue::of(text));
+        if (!text.empty() || stated(name)) out_.add(name, JsonValue::of(text));
     }
     void person_or_room(const char* name, const Id& by) {
         if (!by.empty()) {
@@ -44,27 +43,22 @@ public:
     }
     void number(const char* name, double number) { out_.add(name, JsonValue::of(number)); }
     void number_or(const char* name, double number, double usual) {
-        if (number != usual || stated(name))
-            out_.add(name, JsonValue::of(number));
+        if (number != usual || stated(name)) out_.add(name, JsonValue::of(number));
     }
     void maybe_number(const char* name, const std::optional<double>& number) {
-        if (number)
-            out_.add(name, JsonValue::of(*number));
+        if (number) out_.add(name, JsonValue::of(*number));
     }
     void count_or(const char* name, int count, int usual) { number_or(name, count, usual); }
     void maybe_count(const char* name, const std::optional<int>& count) {
-        if (count)
-            out_.add(name, JsonValue::of(*count));
+        if (count) out_.add(name, JsonValue::of(*count));
     }
     void seed(const char* name, std::uint64_t seed) { number_or(name, static_cast<double>(seed), 1.0); }
     void flag(const char* name, bool flag) {
-        if (flag || stated(name))
-            out_.add(name, JsonValue::of(flag));
+        if (flag || stated(name)) out_.add(name, JsonValue::of(flag));
     }
     template<class Enum>
     void word(const char* name, Enum value, Enum usual = Enum{}) {
-        if (value != usual || stated(name))
-            out_.add(name, JsonValue::of(steelyard::word(value)));
+        if (value != usual || stated(name)) out_.add(name, JsonValue::of(steelyard::word(value)));
     }
     template<class Enum>
     void needed_word(const char* name, Enum value) {
@@ -72,24 +66,19 @@ public:
     }
     template<class Enum>
     void words(const char* name, const std::vector<Enum>& values) {
-        if (values == std::vector<Enum>{Enum{}} && !stated(name))
-            return;
+        if (values == std::vector<Enum>{Enum{}} && !stated(name)) return;
         JsonValue list = JsonValue::array();
-        for (const auto value : values)
-            list.items.push_back(JsonValue::of(steelyard::word(value)));
+        for (const auto value : values) list.items.push_back(JsonValue::of(steelyard::word(value)));
         out_.add(name, std::move(list));
     }
     void ids(const char* name, const std::vector<Id>& ids) {
-        if (ids.empty() && !stated(name))
-            return;
+        if (ids.empty() && !stated(name)) return;
         JsonValue list = JsonValue::array();
-        for (const auto& id : ids)
-            list.items.push_back(JsonValue::of(id));
+        for (const auto& id : ids) list.items.push_back(JsonValue::of(id));
         out_.add(name, std::move(list));
     }
     void id_pairs(const char* name, const std::vector<std::array<Id, 2>>& pairs) {
-        if (pairs.empty() && !stated(name))
-            return;
+        if (pairs.empty() && !stated(name)) return;
         JsonValue list = JsonValue::array();
         for (const auto& [a, b] : pairs) {
             JsonValue pair = JsonValue::array();
@@ -100,20 +89,17 @@ public:
     }
     void numbers_by_id(const char* name, const std::vector<std::pair<Id, double>>& numbers) {
         JsonValue object = JsonValue::object();
-        for (const auto& [id, number] : numbers)
-            object.add(id, JsonValue::of(number));
+        for (const auto& [id, number] : numbers) object.add(id, JsonValue::of(number));
         out_.add(name, std::move(object));
     }
     template<class T>
     void list(const char* name, const std::vector<T>& objects) {
-        if (!objects.empty() || stated(name))
-            needed_list(name, objects);
+        if (!objects.empty() || stated(name)) needed_list(name, objects);
     }
     template<class T>
     void needed_list(const char* name, const std::vector<T>& objects) {
         JsonValue list = JsonValue::array();
-        for (const auto& object : objects)
-            list.items.push_back(write(object));
+        for (const auto& object : objects) list.items.push_back(write(object));
         out_.add(name, std::move(list));
     }
     template<class T>
@@ -122,22 +108,19 @@ public:
     }
     template<class T>
     void maybe_object(const char* name, const std::optional<T>& object) {
-        if (object)
-            out_.add(name, write(*object));
+        if (object) out_.add(name, write(*object));
     }
     template<class T>
     void object(const char* name, const T& object) {
         JsonValue value = write(object);
-        if (!value.members.empty() || stated(name))
-            out_.add(name, std::move(value));
+        if (!value.members.empty() || stated(name)) out_.add(name, std::move(value));
     }
 
     /// A leaf is written with its rate, an inner node with its way of weighing, unless the file did without.
     void node_kind(const Node& node) {
         if (node.is_leaf()) {
             word("weights", node.weights);
-            if (node.rate != RateBy{} || !left_out("rate"))
-                needed_word("rate", node.rate);
+            if (node.rate != RateBy{} || !left_out("rate")) needed_word("rate", node.rate);
         } else if (node.weights != WeightsBy{} || !left_out("weights")) {
             needed_word("weights", node.weights);
         }

@@ -11,8 +11,7 @@ constexpr double tie = 1e-12;
 
 /// 1 where the first counts more, -1 where less, 0 for a tie.
 int preference(double ratio) {
-    if (std::abs(ratio - 1) <= tie)
-        return 0;
+    if (std::abs(ratio - 1) <= tie) return 0;
     return ratio > 1 ? 1 : -1;
 }
 
@@ -26,8 +25,7 @@ void each_triad(const PairMatrix& pairs, Visit visit) {
     for (std::size_t i = 0; i < pairs.size(); ++i) {
         for (std::size_t j = i + 1; j < pairs.size(); ++j) {
             for (std::size_t k = j + 1; k < pairs.size(); ++k) {
-                if (fully_judged(pairs, i, j, k))
-                    visit(i, j, k);
+                if (fully_judged(pairs, i, j, k)) visit(i, j, k);
             }
         }
     }
@@ -36,8 +34,7 @@ void each_triad(const PairMatrix& pairs, Visit visit) {
 } // namespace
 
 std::optional<double> consistency_index(double lambda_max, std::size_t n) {
-    if (n < 2)
-        return std::nullopt;
+    if (n < 2) return std::nullopt;
     const auto size = static_cast<double>(n);
     return std::max(0.0, (lambda_max - size) / (size - 1));
 }
@@ -49,8 +46,7 @@ double lambda_by_hand(const Eigen::MatrixXd& matrix, const Weights& weights) {
 
 std::optional<double> geometric_consistency_index(const PairMatrix& pairs) {
     const std::size_t n = pairs.size();
-    if (n < 3 || !pairs.complete())
-        return std::nullopt;
+    if (n < 3 || !pairs.complete()) return std::nullopt;
     const Eigen::VectorXd y = log_least_squares(pairs);
     double sum = 0;
     for (std::size_t i = 0; i < n; ++i) {
@@ -68,8 +64,7 @@ std::optional<WorstTriad> koczkodaj_index(const PairMatrix& pairs) {
     each_triad(pairs, [&](std::size_t i, std::size_t j, std::size_t k) {
         const double around = pairs.at(i, k) / (pairs.at(i, j) * pairs.at(j, k));
         const double index = std::min(std::abs(1 - around), std::abs(1 - 1 / around));
-        if (!worst || index > worst->index + 1e-12)
-            worst = WorstTriad{index, {i, j, k}};
+        if (!worst || index > worst->index + 1e-12) worst = WorstTriad{index, {i, j, k}};
     });
     return worst;
 }
@@ -83,8 +78,7 @@ CircularTriads circular_triads(const PairMatrix& pairs) {
         const int ties = (ij == 0) + (jk == 0) + (ki == 0);
         const bool forward = ij >= 0 && jk >= 0 && ki >= 0;
         const bool backward = ij <= 0 && jk <= 0 && ki <= 0;
-        if (ties == 3 || (!forward && !backward))
-            return;
+        if (ties == 3 || (!forward && !backward)) return;
         auto& list = ties == 0 ? result.strict : result.tied;
         list.push_back(forward ? Triad{i, j, k} : Triad{i, k, j});
     });

@@ -16,8 +16,7 @@ std::vector<PairMisfit> misfits(const PairMatrix& pairs, Method method, const We
         PairMatrix rest = pairs;
         rest.clear(i, j);
         PairMisfit misfit{i, j, pairs.at(i, j), std::nullopt};
-        if (const auto w = weights_by(way, rest))
-            misfit.implied = (*w)[i] / (*w)[j];
+        if (const auto w = weights_by(way, rest)) misfit.implied = (*w)[i] / (*w)[j];
         list.push_back({misfit, std::abs(std::log(misfit.given * weights[j] / weights[i]))});
     }
     // Insertion by "clearly worse" keeps item order among equals, which a comparison with a tolerance would
@@ -26,8 +25,7 @@ std::vector<PairMisfit> misfits(const PairMatrix& pairs, Method method, const We
     std::vector<double> errors;
     for (const auto& entry : list) {
         std::size_t at = errors.size();
-        while (at > 0 && entry.error > errors[at - 1] + 1e-12)
-            --at;
+        while (at > 0 && entry.error > errors[at - 1] + 1e-12) --at;
         errors.insert(errors.begin() + static_cast<std::ptrdiff_t>(at), entry.error);
         sorted.insert(sorted.begin() + static_cast<std::ptrdiff_t>(at), entry.misfit);
     }

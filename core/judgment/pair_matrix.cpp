@@ -7,8 +7,7 @@
 namespace steelyard {
 
 PairMatrix::PairMatrix(std::size_t size) : size_(size), entries_(size * size, 0.0) {
-    for (std::size_t i = 0; i < size; ++i)
-        entries_[i * size + i] = 1;
+    for (std::size_t i = 0; i < size; ++i) entries_[i * size + i] = 1;
 }
 
 void PairMatrix::set(std::size_t i, std::size_t j, double ratio) {
@@ -27,8 +26,7 @@ std::vector<PairMatrix::Pair> PairMatrix::missing() const {
     std::vector<Pair> pairs;
     for (std::size_t i = 0; i < size_; ++i) {
         for (std::size_t j = i + 1; j < size_; ++j) {
-            if (!judged(i, j))
-                pairs.push_back({i, j});
+            if (!judged(i, j)) pairs.push_back({i, j});
         }
     }
     return pairs;
@@ -38,8 +36,7 @@ std::vector<PairMatrix::Pair> PairMatrix::judged_pairs() const {
     std::vector<Pair> pairs;
     for (std::size_t i = 0; i < size_; ++i) {
         for (std::size_t j = i + 1; j < size_; ++j) {
-            if (judged(i, j))
-                pairs.push_back({i, j});
+            if (judged(i, j)) pairs.push_back({i, j});
         }
     }
     return pairs;
@@ -53,8 +50,7 @@ std::vector<std::vector<std::size_t>> PairMatrix::parts() const {
     std::vector<std::vector<std::size_t>> parts;
     std::vector<bool> seen(size_, false);
     for (std::size_t start = 0; start < size_; ++start) {
-        if (seen[start])
-            continue;
+        if (seen[start]) continue;
         std::vector<std::size_t> part{start};
         seen[start] = true;
         for (std::size_t k = 0; k < part.size(); ++k) {
@@ -75,8 +71,7 @@ PairMatrix PairMatrix::restricted(const std::vector<std::size_t>& items) const {
     PairMatrix result(items.size());
     for (std::size_t i = 0; i < items.size(); ++i) {
         for (std::size_t j = i + 1; j < items.size(); ++j) {
-            if (judged(items[i], items[j]))
-                result.set(i, j, at(items[i], items[j]));
+            if (judged(items[i], items[j])) result.set(i, j, at(items[i], items[j]));
         }
     }
     return result;

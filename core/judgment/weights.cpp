@@ -14,8 +14,7 @@ using Eigen::VectorXd;
 
 Weights normalised(Weights w) {
     const double sum = std::accumulate(w.begin(), w.end(), 0.0);
-    for (auto& x : w)
-        x /= sum;
+    for (auto& x : w) x /= sum;
     return w;
 }
 
@@ -25,15 +24,13 @@ VectorXd log_least_squares(const PairMatrix& pairs) {
     const std::size_t n = pairs.size();
     const auto size = static_cast<Index>(n);
     VectorXd y = VectorXd::Zero(size);
-    if (n < 2)
-        return y;
+    if (n < 2) return y;
     // The last item is held at 0, which leaves a positive definite system.
     MatrixXd laplacian = MatrixXd::Zero(size, size);
     VectorXd r = VectorXd::Zero(size);
     for (std::size_t i = 0; i < n; ++i) {
         for (std::size_t j = i + 1; j < n; ++j) {
-            if (!pairs.judged(i, j))
-                continue;
+            if (!pairs.judged(i, j)) continue;
             const auto p = static_cast<Index>(i);
             const auto q = static_cast<Index>(j);
             const double ratio = std::log(pairs.at(i, j));
@@ -51,12 +48,10 @@ VectorXd log_least_squares(const PairMatrix& pairs) {
 }
 
 std::optional<Weights> geometric_mean_weights(const PairMatrix& pairs) {
-    if (!pairs.connected())
-        return std::nullopt;
+    if (!pairs.connected()) return std::nullopt;
     const VectorXd y = log_least_squares(pairs);
     Weights w(pairs.size());
-    for (std::size_t i = 0; i < w.size(); ++i)
-        w[i] = std::exp(y(static_cast<Index>(i)));
+    for (std::size_t i = 0; i < w.size(); ++i) w[i] = std::exp(y(static_cast<Index>(i)));
     return normalised(std::move(w));
 }
 
@@ -66,31 +61,24 @@ Weights eigenvector_weights(const Completion& completion) {
 }
 
 std::optional<Weights> column_average_weights(const PairMatrix& pairs) {
-    if (!pairs.complete())
-        return std::nullopt;
+    if (!pairs.complete()) return std::nullopt;
     const std::size_t n = pairs.size();
     Weights w(n, 0.0);
     for (std::size_t j = 0; j < n; ++j) {
         double sum = 0;
-        for (std::size_t i = 0; i < n; ++i)
-            sum += pairs.at(i, j);
-        for (std::size_t i = 0; i < n; ++i)
-            w[i] += pairs.at(i, j) / sum;
+        for (std::size_t i = 0; i < n; ++i) sum += pairs.at(i, j);
+        for (std::size_t i = 0; i < n; ++i) w[i] += pairs.at(i, j) / sum;
     }
     return normalised(std::move(w));
 }
 
 std::optional<Weights> weights_by(Method method, const PairMatrix& pairs) {
     switch (method) {
-    case Method::geometric_mean:
-        return geometric_mean_weights(pairs);
-    case Method::column_average:
-        return column_average_weights(pairs);
-    case Method::eigenvector:
-        break;
+    case Method::geometric_mean: return geometric_mean_weights(pairs);
+    case Method::column_average: return column_average_weights(pairs);
+    case Method::eigenvector: break;
     }
-    if (!pairs.connected())
-        return std::nullopt;
+    if (!pairs.connected()) return std::nullopt;
     return eigenvector_weights(complete_optimally(pairs));
 }
 
@@ -106,8 +94,7 @@ Weights combine_weights(const std::vector<Weights>& weights, const std::vector<d
         }
     }
     if (!arithmetic) {
-        for (auto& x : combined)
-            x = std::exp(x);
+        for (auto& x : combined) x = std::exp(x);
     }
     return normalised(std::move(combined));
 }

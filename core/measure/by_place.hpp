@@ -14,8 +14,7 @@ template<class Entry>
 class ByPlace {
 public:
     explicit ByPlace(const std::vector<Entry>& entries) {
-        for (const auto& entry : entries)
-            places_[key(entry.criterion, entry.option)].push_back(&entry);
+        for (const auto& entry : entries) places_[key(entry.criterion, entry.option)].push_back(&entry);
     }
 
     const std::vector<const Entry*>& at(const Id& criterion, const Id& option) const {

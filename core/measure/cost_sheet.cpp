@@ -6,8 +6,7 @@
 namespace steelyard {
 
 double annuity_factor(double discount, int years) {
-    if (discount == 0)
-        return years;
+    if (discount == 0) return years;
     return -std::expm1(-years * std::log1p(discount)) / discount;
 }
 
@@ -26,44 +25,42 @@ std::vector<const Cost*> standing_costs(const std::vector<const Cost*>& entered)
     return lines;
 }
 
+namespace {
+
+/// Sums and factors of any finite lines can leave the range of a double; such a figure is none.
+std::optional<double> if_finite(double figure) {
+    return std::isfinite(figure) ? std::optional(figure) : std::nullopt;
+}
+
+} // namespace
+
 std::optional<double> cost_sheet_figure(const CostSheet& sheet, const std::vector<const Cost*>& lines) {
-    if (lines.empty())
-        return std::nullopt;
+    if (lines.empty()) return std::nullopt;
     const double annuity = annuity_factor(sheet.discount, sheet.years);
     double present = 0;
     for (const Cost* line : lines) {
         const double value = *line->value * line->in_unit;
         switch (line->kind) {
-        case CostKind::once:
-            present += value;
-            break;
-        case CostKind::per_year:
-            present += value * annuity;
-            break;
+        case CostKind::once: present += value; break;
+        case CostKind::per_year: present += value * annuity; break;
         case CostKind::per_part:
-            if (!sheet.volume)
-                return std::nullopt;
+            if (!sheet.volume) return std::nullopt;
             present += value * *sheet.volume * annuity;
             break;
         case CostKind::in_year: {
             const int year = line->year.value_or(0);
-            if (year <= sheet.years)
-                present += value * std::pow(1 + sheet.discount, -year);
+            if (year <= sheet.years) present += value * std::pow(1 + sheet.discount, -year);
             break;
         }
         }
     }
     switch (sheet.result) {
-    case CostResult::total:
-        return present;
-    case CostResult::per_year:
-        return present / annuity;
-    case CostResult::per_part:
-        break;
+    case CostResult::total: return if_finite(present);
+    case CostResult::per_year: return if_finite(present / annuity);
+    case CostResult::per_part: break;
     }
-    if (!sheet.volume)
-        return std::nullopt;
-    return present / annuity / *sheet.volume;
+    if (!sheet.volume) return std::nullopt;
+    return if_finite(present / annuity / *sheet.volume);
 }
 
 } // namespace steelyard

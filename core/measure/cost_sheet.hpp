@@ -16,7 +16,8 @@ double annuity_factor(double discount, int years);
 std::vector<const Cost*> standing_costs(const std::vector<const Cost*>& entered);
 
 /// The figure a cost sheet gives for these lines, in the criterion's unit: present value, annuity, or annuity
-/// per part. None without lines, or where a line or the result is per part and the sheet has no volume. Part
+/// per part. None without lines, or where a line or the result is per part and the sheet has no volume, or
+/// where the figure would be beyond a double. Part
 /// of life-cycle cost practice (IEC 60300-3-3, ASTM E917, VDMA 34160; from memory).
 std::optional<double> cost_sheet_figure(const CostSheet& sheet, const std::vector<const Cost*>& lines);
 

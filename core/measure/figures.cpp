@@ -12,8 +12,7 @@ Figures::Figures(const Decision& decision) {
     }
     const ByPlace<Cost> costs(decision.costs);
     for (const Node* leaf : leaves(decision.criteria)) {
-        if (leaf->rate != RateBy::figure || !leaf->cost_sheet)
-            continue;
+        if (leaf->rate != RateBy::figure || !leaf->cost_sheet) continue;
         for (const auto& option : decision.options) {
             const auto lines = standing_costs(costs.at(leaf->id, option.id));
             figures_[{leaf->id, option.id}] = {cost_sheet_figure(*leaf->cost_sheet, lines), {}, {}};

@@ -9,12 +9,10 @@ GradeFinding find_grade_worth(const std::vector<Person>& people, const Node& lea
                               const std::vector<const GradeEntry*>& entered,
                               const std::vector<std::optional<double>>& worths) {
     std::map<Id, Id> grade_by; // Person to the grade that stands; "" is agreed in the room.
-    for (const GradeEntry* entry : entered)
-        grade_by[entry->by] = entry->grade;
+    for (const GradeEntry* entry : entered) grade_by[entry->by] = entry->grade;
     const auto worth_of_grade = [&](const Id& grade) -> std::optional<double> {
         for (std::size_t i = 0; i < leaf.grades.size(); ++i) {
-            if (leaf.grades[i].id == grade)
-                return worths[i];
+            if (leaf.grades[i].id == grade) return worths[i];
         }
         return std::nullopt;
     };
@@ -26,19 +24,16 @@ GradeFinding find_grade_worth(const std::vector<Person>& people, const Node& lea
     double shares = 0;
     for (const auto& person : people) {
         const auto own = grade_by.find(person.id);
-        if (own == grade_by.end() || own->second.empty() || person.share == 0)
-            continue;
+        if (own == grade_by.end() || own->second.empty() || person.share == 0) continue;
         if (std::find(person.abstains.begin(), person.abstains.end(), option) != person.abstains.end())
             continue;
         finding.given = true;
         const auto worth = worth_of_grade(own->second);
-        if (!worth)
-            return finding;
+        if (!worth) return finding;
         sum += person.share * *worth;
         shares += person.share;
     }
-    if (finding.given)
-        finding.worth = sum / shares;
+    if (finding.given) finding.worth = sum / shares;
     return finding;
 }
 

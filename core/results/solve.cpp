@@ -20,11 +20,9 @@ namespace {
 /// The largest of some weights becomes 1.
 std::vector<std::optional<double>> against_largest(const std::optional<Weights>& weights, std::size_t n) {
     std::vector<std::optional<double>> worths(n);
-    if (!weights)
-        return worths;
+    if (!weights) return worths;
     const double largest = *std::max_element(weights->begin(), weights->end());
-    for (std::size_t i = 0; i < n; ++i)
-        worths[i] = (*weights)[i] / largest;
+    for (std::size_t i = 0; i < n; ++i) worths[i] = (*weights)[i] / largest;
     return worths;
 }
 
@@ -74,8 +72,7 @@ private:
     void solve_grades(const Node& leaf) {
         auto& worths = grade_worths_[leaf.id];
         if (leaf.worths == WorthsBy::given) {
-            for (const auto& grade : leaf.grades)
-                worths.push_back(grade.worth);
+            for (const auto& grade : leaf.grades) worths.push_back(grade.worth);
         } else if (leaf.grades.size() >= 2) {
             SetSolution solution = sets_.pairs(leaf, set_items(d_, leaf.id));
             worths = against_largest(solution.group().weights, leaf.grades.size());
@@ -106,8 +103,7 @@ private:
             }
             break;
         case RateBy::figure:
-            if (!leaf.curve)
-                break;
+            if (!leaf.curve) break;
             out.anchored = is_anchored(*leaf.curve);
             for (std::size_t o = 0; o < options.size(); ++o) {
                 if (const auto x = figures_.of(leaf.id, options[o]).value)
@@ -141,32 +137,26 @@ private:
     void exclude() {
         std::vector<Id> present;
         for (const auto& option : d_.options) {
-            if (!option.withdrawn)
-                present.push_back(option.id);
+            if (!option.withdrawn) present.push_back(option.id);
         }
         std::vector<Id> field; // Those that meet all requirements but the ones on a node's worth.
         for (const auto& option : present) {
             bool failed = false;
             for (const auto& requirement : d_.requirements) {
-                if (!requirement.node.empty())
-                    continue;
+                if (!requirement.node.empty()) continue;
                 note_must(requirement, option, find_must(d_, figures_, requirement, option));
                 failed = failed || findings_.at({option, requirement.id}).state == MustState::failed;
             }
-            if (!failed)
-                field.push_back(option);
+            if (!failed) field.push_back(option);
         }
         for (const auto& requirement : d_.requirements) {
-            if (requirement.node.empty())
-                continue;
-            for (const auto& option : present)
-                note_must(requirement, option, {});
+            if (requirement.node.empty()) continue;
+            for (const auto& option : present) note_must(requirement, option, {});
             const auto worths = node_worths(requirement.node, field);
             for (std::size_t o = 0; o < field.size(); ++o) {
                 const auto& w = worths[o];
                 MustState state = against_limits(requirement, w.low, w.high);
-                if (!w.weighed && state != MustState::unchecked)
-                    state = MustState::undecided;
+                if (!w.weighed && state != MustState::unchecked) state = MustState::undecided;
                 note_must(requirement, field[o], {state, w.value});
             }
         }
@@ -175,13 +165,11 @@ private:
             for (const auto& requirement : d_.requirements) {
                 const auto& finding = findings_.at({option, requirement.id});
                 results_.musts.push_back({requirement.id, option, finding.state, finding.value});
-                if (finding.state != MustState::failed)
-                    continue;
+                if (finding.state != MustState::failed) continue;
                 results_.excluded.push_back({option, requirement.id, finding.value});
                 failed = true;
             }
-            if (!failed)
-                results_.options.push_back(option);
+            if (!failed) results_.options.push_back(option);
         }
     }
 
@@ -197,11 +185,9 @@ private:
         std::vector<NodeWorth> worths(field.size());
         for (const auto& at : weigh_tree(*find_node(d_.criteria, id), criteria_weights_)) {
             if (at.node->children.size() >= 2 && !criteria_weights_.at(at.node->id)) {
-                for (auto& worth : worths)
-                    worth.weighed = false;
+                for (auto& worth : worths) worth.weighed = false;
             }
-            if (!at.node->is_leaf())
-                continue;
+            if (!at.node->is_leaf()) continue;
             const LocalValues local = locals_on(*at.node, field, Synthesis::ideal);
             for (std::size_t o = 0; o < field.size(); ++o) {
                 worths[o].value += at.weight * local.values[o];
@@ -213,11 +199,9 @@ private:
     }
 
     void solve_option_sets() {
-        if (results_.options.size() < 2)
-            return;
+        if (results_.options.size() < 2) return;
         for (const Node* leaf : leaves_) {
-            if (leaf->rate == RateBy::pairs)
-                keep(leaf->id, sets_.options(*leaf, results_.options));
+            if (leaf->rate == RateBy::pairs) keep(leaf->id, sets_.options(*leaf, results_.options));
         }
     }
 
@@ -231,12 +215,10 @@ private:
         std::vector<bool> ranged(m, false);
         for (const auto& at : tree) {
             const bool unweighed = at.node->children.size() >= 2 && !criteria_weights_.at(at.node->id);
-            if (unweighed && at.weight > 0)
-                results_.provisional = true;
+            if (unweighed && at.weight > 0) results_.provisional = true;
             results_.nodes.push_back({at.node->id, at.parent == nullptr ? Id{} : at.parent->id, at.depth,
                                       at.node->is_leaf(), at.local, at.weight, std::vector<double>(m, 0.0)});
-            if (!at.node->is_leaf())
-                continue;
+            if (!at.node->is_leaf()) continue;
 
             const auto set = solved_.find(at.node->id);
             const SetResult* pairs =
@@ -254,24 +236,19 @@ private:
                 results_.nodes.back().contribution[o] = part;
                 low[o] += local.missing[o] ? 0 : part;
                 high[o] += local.missing[o] ? at.weight : part;
-                if (local.missing[o])
-                    ranged[o] = true;
-                if (local.missing[o] && at.weight > 0)
-                    results_.provisional = true;
+                if (local.missing[o]) ranged[o] = true;
+                if (local.missing[o] && at.weight > 0) results_.provisional = true;
             }
             results_.leaves.push_back({at.node->id, at.weight, local.values, local.missing});
         }
         for (auto node = results_.nodes.rbegin(); node != results_.nodes.rend(); ++node) {
             const auto parent = std::find_if(results_.nodes.begin(), results_.nodes.end(),
                                              [&](const NodeResult& n) { return n.node == node->parent; });
-            if (parent == results_.nodes.end())
-                continue;
-            for (std::size_t o = 0; o < m; ++o)
-                parent->contribution[o] += node->contribution[o];
+            if (parent == results_.nodes.end()) continue;
+            for (std::size_t o = 0; o < m; ++o) parent->contribution[o] += node->contribution[o];
         }
         for (std::size_t o = 0; ideal && o < m; ++o) {
-            if (ranged[o])
-                results_.ranges.push_back({results_.options[o], {low[o], high[o]}});
+            if (ranged[o]) results_.ranges.push_back({results_.options[o], {low[o], high[o]}});
         }
         results_.ranks = rank(results_.scores);
         results_.shares = shares_of(results_.scores);
@@ -285,8 +262,7 @@ private:
             results_.lead_points = 100 * (sorted[0] - sorted[1]);
         }
         for (const Node* leaf : leaves_) {
-            if (leaf->rate != RateBy::figure || !leaf->cost_sheet)
-                continue;
+            if (leaf->rate != RateBy::figure || !leaf->cost_sheet) continue;
             ComputedFigures computed{leaf->id, {}};
             for (const auto& option : d_.options) {
                 if (const auto x = figures_.of(leaf->id, option.id).value)
@@ -300,16 +276,14 @@ private:
     void order_sets() {
         for (const auto& placed : placed_nodes(d_.criteria)) {
             const auto found = solved_.find(placed.node->id);
-            if (found == solved_.end())
-                continue;
+            if (found == solved_.end()) continue;
             std::move(found->second.begin(), found->second.end(), std::back_inserter(results_.sets));
         }
     }
 
     void list_open() {
         for (const auto& set : results_.sets) {
-            if (!set.by.empty())
-                continue;
+            if (!set.by.empty()) continue;
             if (set.from_points && !set.weights) {
                 results_.open.push_back({.kind = OpenKind::points, .set = set.set});
             }
@@ -317,41 +291,35 @@ private:
                 results_.open.push_back({.kind = OpenKind::judgment, .set = set.set, .a = a, .b = b});
             }
         }
-        for (std::size_t l = 0; l < leaves_.size(); ++l)
-            list_open_on(*leaves_[l], results_.leaves[l]);
+        for (std::size_t l = 0; l < leaves_.size(); ++l) list_open_on(*leaves_[l], results_.leaves[l]);
         for (const auto& must : results_.musts) {
             const bool in_play = std::find(results_.options.begin(), results_.options.end(), must.option) !=
                                  results_.options.end();
             const bool open = must.state == MustState::undecided || must.state == MustState::unchecked ||
                               must.state == MustState::asked;
-            if (!in_play || !open)
-                continue;
+            if (!in_play || !open) continue;
             results_.open.push_back(
                 {.kind = OpenKind::requirement, .option = must.option, .requirement = must.requirement});
         }
     }
 
     void list_open_on(const Node& leaf, const LeafResult& values) {
-        if (leaf.rate == RateBy::pairs)
-            return;
+        if (leaf.rate == RateBy::pairs) return;
         if (leaf.rate == RateBy::figure && !leaf.curve) {
             results_.open.push_back({.kind = OpenKind::curve, .criterion = leaf.id});
             return;
         }
         if (leaf.rate == RateBy::grade && leaf.worths == WorthsBy::given) {
             for (const auto& grade : leaf.grades) {
-                if (grade.worth)
-                    continue;
+                if (grade.worth) continue;
                 results_.open.push_back({.kind = OpenKind::worth, .criterion = leaf.id, .grade = grade.id});
             }
         }
         const OpenKind kind = leaf.rate == RateBy::figure ? OpenKind::figure : OpenKind::grade;
         for (std::size_t o = 0; o < results_.options.size(); ++o) {
-            if (!values.missing[o])
-                continue;
+            if (!values.missing[o]) continue;
             // A grade whose worth is missing is given; what is open is its worth or the judgments behind it.
-            if (kind == OpenKind::grade && grade_of(leaf, results_.options[o]).given)
-                continue;
+            if (kind == OpenKind::grade && grade_of(leaf, results_.options[o]).given) continue;
             results_.open.push_back({.kind = kind, .criterion = leaf.id, .option = results_.options[o]});
         }
     }

@@ -14,12 +14,9 @@ namespace {
 
 std::optional<Weights>& by_method(SetResult& result, Method method) {
     switch (method) {
-    case Method::geometric_mean:
-        return result.geometric_mean;
-    case Method::column_average:
-        return result.column_average;
-    case Method::eigenvector:
-        break;
+    case Method::geometric_mean: return result.geometric_mean;
+    case Method::column_average: return result.column_average;
+    case Method::eigenvector: break;
     }
     return result.eigenvector;
 }
@@ -38,28 +35,23 @@ SetResult describe_matrix(const Id& set, const Id& by, const std::vector<Id>& it
     result.by = by;
     result.items = items;
     const std::size_t n = items.size();
-    for (const auto& [i, j] : pairs.missing())
-        result.missing.push_back({items[i], items[j]});
+    for (const auto& [i, j] : pairs.missing()) result.missing.push_back({items[i], items[j]});
     if (const auto worst = koczkodaj_index(pairs)) {
         result.koczkodaj = worst->index;
         result.worst_triad = named(items, worst->triad);
     }
     const CircularTriads circular = circular_triads(pairs);
-    for (const auto& triad : circular.strict)
-        result.cycles.push_back(named(items, triad));
-    for (const auto& triad : circular.tied)
-        result.tied_cycles.push_back(named(items, triad));
+    for (const auto& triad : circular.strict) result.cycles.push_back(named(items, triad));
+    for (const auto& triad : circular.tied) result.tied_cycles.push_back(named(items, triad));
     result.zeta = circular.zeta;
 
     const auto parts = pairs.parts();
     for (const auto& part : parts) {
         std::vector<Id> ids;
-        for (const auto i : part)
-            ids.push_back(items[i]);
+        for (const auto i : part) ids.push_back(items[i]);
         result.parts.push_back(std::move(ids));
     }
-    if (parts.size() > 1)
-        return result;
+    if (parts.size() > 1) return result;
 
     const Completion completion = complete_optimally(pairs);
     result.eigenvector = eigenvector_weights(completion);
@@ -67,12 +59,10 @@ SetResult describe_matrix(const Id& set, const Id& by, const std::vector<Id>& it
     result.column_average = column_average_weights(pairs);
     result.weights = by_method(result, settings.method);
     result.lambda_max = completion.principal.lambda;
-    if (result.weights)
-        result.lambda_hand = lambda_by_hand(completion.matrix, *result.weights);
+    if (result.weights) result.lambda_hand = lambda_by_hand(completion.matrix, *result.weights);
     result.ci = consistency_index(completion.principal.lambda, n);
     result.ri = random_index(settings.random_index, n, result.missing.size());
-    if (result.ri)
-        result.cr = *result.ci / *result.ri;
+    if (result.ri) result.cr = *result.ci / *result.ri;
     result.gci = geometric_consistency_index(pairs);
     const Method error_method =
         settings.method == Method::column_average ? Method::eigenvector : settings.method;
@@ -90,8 +80,7 @@ std::vector<std::array<Id, 2>> open_pairs(const Decision& decision, const SetRes
     for (const auto& pair : group.missing) {
         std::set<Id> skipped_by;
         for (const auto& finished : decision.finished) {
-            if (finished.set != group.set)
-                continue;
+            if (finished.set != group.set) continue;
             for (const auto& [a, b] : finished.skipped) {
                 if ((a == pair[0] && b == pair[1]) || (a == pair[1] && b == pair[0]))
                     skipped_by.insert(finished.by);
@@ -101,16 +90,14 @@ std::vector<std::array<Id, 2>> open_pairs(const Decision& decision, const SetRes
                             std::all_of(judged.judges.begin(), judged.judges.end(),
                                         [&](const JudgeAnswers& j) { return skipped_by.contains(j.person); });
         const bool skipped = skipped_by.contains(Id{}) || by_all;
-        if (!skipped || !group.weights)
-            open.push_back(pair);
+        if (!skipped || !group.weights) open.push_back(pair);
     }
     return open;
 }
 
 std::string list_names(const Decision& decision, const Id& set, const std::vector<Id>& items) {
     std::string text;
-    for (const auto& item : items)
-        text += (text.empty() ? "" : ", ") + item_name(decision, set, item);
+    for (const auto& item : items) text += (text.empty() ? "" : ", ") + item_name(decision, set, item);
     return text;
 }
 
@@ -152,8 +139,7 @@ SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) con
             std::vector<double> shares;
             for (std::size_t k = 0; k < judged.judges.size(); ++k) {
                 const double share = judged.judges[k].share;
-                if (share == 0)
-                    continue;
+                if (share == 0) continue;
                 if (const auto& own = by_method(solution.entries[k + 1], method)) {
                     weights.push_back(*own);
                     shares.push_back(share);
@@ -224,22 +210,18 @@ SetSolution SetSolver::options(const Node& leaf, const std::vector<Id>& in_play)
 
 SetSolution SetSolver::points(const Node& node) const {
     std::vector<Id> items;
-    for (const auto& child : node.children)
-        items.push_back(child.id);
+    for (const auto& child : node.children) items.push_back(child.id);
     const PointsEntry* agreed = nullptr;
     std::vector<std::pair<const Person*, const PointsEntry*>> own;
     for (const auto& entry : decision_.points) {
-        if (entry.set == node.id && entry.by.empty())
-            agreed = &entry;
+        if (entry.set == node.id && entry.by.empty()) agreed = &entry;
     }
     for (const auto& person : decision_.people) {
         const PointsEntry* last = nullptr;
         for (const auto& entry : decision_.points) {
-            if (entry.set == node.id && entry.by == person.id)
-                last = &entry;
+            if (entry.set == node.id && entry.by == person.id) last = &entry;
         }
-        if (last != nullptr)
-            own.emplace_back(&person, last);
+        if (last != nullptr) own.emplace_back(&person, last);
     }
     const auto normalised = [&](const PointsEntry& entry) {
         Weights w(items.size(), 0.0);
@@ -249,8 +231,7 @@ SetSolution SetSolver::points(const Node& node) const {
             w[static_cast<std::size_t>(at)] = points;
             sum += points;
         }
-        for (auto& x : w)
-            x /= sum;
+        for (auto& x : w) x /= sum;
         return w;
     };
     const auto entry_of = [&](const Id& by, std::optional<Weights> weights) {
@@ -266,8 +247,7 @@ SetSolution SetSolver::points(const Node& node) const {
     std::vector<Weights> weights;
     std::vector<double> shares;
     for (const auto& [person, entry] : own) {
-        if (person->share == 0)
-            continue;
+        if (person->share == 0) continue;
         weights.push_back(normalised(*entry));
         shares.push_back(person->share);
     }

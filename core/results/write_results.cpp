@@ -24,24 +24,21 @@ JsonValue maybe(const Id& id) {
 template<class List>
 JsonValue ids(const List& list) {
     JsonValue out = JsonValue::array();
-    for (const auto& id : list)
-        out.items.push_back(JsonValue::of(id));
+    for (const auto& id : list) out.items.push_back(JsonValue::of(id));
     return out;
 }
 
 template<class Lists>
 JsonValue id_lists(const Lists& lists) {
     JsonValue out = JsonValue::array();
-    for (const auto& list : lists)
-        out.items.push_back(ids(list));
+    for (const auto& list : lists) out.items.push_back(ids(list));
     return out;
 }
 
 template<class Number>
 JsonValue by_id(const std::vector<Id>& ids, const std::vector<Number>& numbers) {
     JsonValue out = JsonValue::object();
-    for (std::size_t i = 0; i < ids.size(); ++i)
-        out.add(ids[i], JsonValue::of(numbers[i]));
+    for (std::size_t i = 0; i < ids.size(); ++i) out.add(ids[i], JsonValue::of(numbers[i]));
     return out;
 }
 
@@ -56,8 +53,7 @@ JsonValue all_settings(Settings settings) {
     settings.trials.extras.stated = {"n", "seed", "kinds", "spread"};
     JsonValue out = to_json(settings);
     for (auto& [name, value] : out.members) {
-        if (name == "money" && value.text.empty())
-            value = JsonValue{};
+        if (name == "money" && value.text.empty()) value = JsonValue{};
     }
     return out;
 }
@@ -87,12 +83,9 @@ JsonValue set_json(const SetResult& set) {
 
 JsonValue limit_of(const Requirement& requirement) {
     JsonValue limit = JsonValue::object();
-    if (requirement.at_least)
-        limit.add("at_least", JsonValue::of(*requirement.at_least));
-    if (requirement.at_most)
-        limit.add("at_most", JsonValue::of(*requirement.at_most));
-    if (requirement.min_worth)
-        limit.add("min_worth", JsonValue::of(*requirement.min_worth));
+    if (requirement.at_least) limit.add("at_least", JsonValue::of(*requirement.at_least));
+    if (requirement.at_most) limit.add("at_most", JsonValue::of(*requirement.at_most));
+    if (requirement.min_worth) limit.add("min_worth", JsonValue::of(*requirement.min_worth));
     return limit;
 }
 
@@ -102,11 +95,9 @@ JsonValue excluded_json(const Decision& decision, const std::vector<Exclusion>& 
         JsonValue one = JsonValue::object();
         one.add("option", JsonValue::of(exclusion.option))
             .add("requirement", JsonValue::of(exclusion.requirement));
-        if (exclusion.value)
-            one.add("value", JsonValue::of(*exclusion.value));
+        if (exclusion.value) one.add("value", JsonValue::of(*exclusion.value));
         JsonValue limit = limit_of(*find_requirement(decision, exclusion.requirement));
-        if (!limit.members.empty())
-            one.add("limit", std::move(limit));
+        if (!limit.members.empty()) one.add("limit", std::move(limit));
         out.items.push_back(std::move(one));
     }
     return out;
@@ -127,8 +118,7 @@ JsonValue open_json(const std::vector<OpenItem>& open) {
                                                                         {"option", &item.option},
                                                                         {"grade", &item.grade}}};
         for (const auto& [name, id] : members) {
-            if (!id->empty())
-                one.add(name, JsonValue::of(*id));
+            if (!id->empty()) one.add(name, JsonValue::of(*id));
         }
         out.items.push_back(std::move(one));
     }
@@ -144,8 +134,7 @@ std::string write_results(const Decision& decision, const Results& results) {
     out.add("settings", all_settings(results.settings));
 
     JsonValue sets = JsonValue::array();
-    for (const auto& set : results.sets)
-        sets.items.push_back(set_json(set));
+    for (const auto& set : results.sets) sets.items.push_back(set_json(set));
     out.add("sets", std::move(sets));
 
     JsonValue weights = JsonValue::object();
@@ -158,8 +147,7 @@ std::string write_results(const Decision& decision, const Results& results) {
     JsonValue figures = JsonValue::object();
     for (const auto& leaf : results.figures) {
         JsonValue values = JsonValue::object();
-        for (const auto& [option, value] : leaf.values)
-            values.add(option, JsonValue::of(value));
+        for (const auto& [option, value] : leaf.values) values.add(option, JsonValue::of(value));
         figures.add(leaf.leaf, std::move(values));
     }
     out.add("figures", std::move(figures)).add("local", std::move(local));

@@ -38,11 +38,9 @@ std::vector<int> rank(const std::vector<double>& scores) {
 
 std::optional<std::vector<double>> shares_of(const std::vector<double>& scores) {
     const double sum = std::accumulate(scores.begin(), scores.end(), 0.0);
-    if (!(sum > 0))
-        return std::nullopt;
+    if (!(sum > 0)) return std::nullopt;
     std::vector<double> shares = scores;
-    for (auto& share : shares)
-        share /= sum;
+    for (auto& share : shares) share /= sum;
     return shares;
 }
 

@@ -1,0 +1,86 @@
+#pragma once
+
+#include <functional>
+#include <memory>
+#include <string>
+#include <string_view>
+#include <vector>
+
+#include "core/decision/edit.hpp"
+#include "core/results/results.hpp"
+#include "shell/ui.hpp"
+
+namespace steelyard {
+
+enum class RoomId { frame, weigh, gauge, standing, tipping, record };
+
+/// What a room may read.
+struct RoomView {
+    const Decision& decision;
+    const Results& results;
+    Id person;              ///< Who answers now; empty: agreed in the room.
+    bool read_only = false; ///< Another page writes this decision; controls that edit are disabled.
+};
+
+/// What a room asks for. Carried out after the frame.
+class Actions {
+public:
+    /// One step. Where it takes entries away the app asks first, naming how many.
+    void edit(Edit edit) { this->edit(std::vector<Edit>{std::move(edit)}); }
+    void edit(std::vector<Edit> edits, std::string label = {}) {
+        steps.push_back({std::move(edits), std::move(label)});
+    }
+
+    /// Another room, showing the item with this id (a set, a criterion, an option) if not empty.
+    void go(RoomId room, Id focus = {}) { go_to = {room, std::move(focus), true}; }
+    void copy(std::string text) { to_copy = std::move(text); }
+    void answer_as(Id person) { answers = {std::move(person), true}; }
+    void say(std::string text) { message = std::move(text); }
+
+    struct Step {
+        std::vector<Edit> edits;
+        std::string label;
+    };
+    struct Destination {
+        RoomId room = RoomId::frame;
+        Id focus;
+        bool wanted = false;
+    };
+    struct Answering {
+        Id person;
+        bool wanted = false;
+    };
+    std::vector<Step> steps;
+    Destination go_to;
+    Answering answers;
+    std::string to_copy;
+    std::string message;
+};
+
+/// One room of the rail. It keeps only its own selection, scroll and half-typed text.
+class Room {
+public:
+    virtual ~Room() = default;
+    virtual void draw(Ui& ui, const RoomView& view, Actions& actions, Box area) = 0;
+
+    /// Shows an item, asked for by another room or the line below.
+    virtual void show(const Id&) {}
+
+    /// Text pasted while no field had the focus. True if it was taken.
+    virtual bool paste(const std::string&, const RoomView&, Actions&) { return false; }
+
+    /// A new decision was opened: selections are void.
+    virtual void reset() {}
+};
+
+/// A fresh id for something added: `stem`, or `stem2`, `stem3` … not among those taken.
+Id fresh_id(const std::string& stem, const std::function<bool(const Id&)>& taken);
+
+std::unique_ptr<Room> make_frame_room();
+std::unique_ptr<Room> make_weigh_room();
+std::unique_ptr<Room> make_gauge_room();
+std::unique_ptr<Room> make_standing_room();
+std::unique_ptr<Room> make_tipping_room();
+std::unique_ptr<Room> make_record_room();
+
+} // namespace steelyard

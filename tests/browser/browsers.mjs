@@ -1,0 +1,115 @@
+// Debian's Chromium and Firefox, headless, without graphics acceleration, each with a profile of its own.
+
+import { spawnSync } from 'node:child_process';
+import { existsSync, mkdtempSync, readdirSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+
+import puppeteer from 'puppeteer-core';
+
+/// The release file: what is built is what is tested.
+export const pageFile = process.env.STEELYARD_PAGE ?? fileURLToPath(new URL('../../build/web/steelyard.html', import.meta.url));
+
+/// The native command, for comparing what the page saves and shows.
+export const nativeCommand = fileURLToPath(new URL('../../build/native/steelyard', import.meta.url));
+
+export const browserNames = (process.env.STEELYARD_BROWSERS ?? 'chromium,firefox').split(',');
+
+const chromiumArguments = [
+    '--no-sandbox', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update',
+    '--disable-sync', '--disable-gpu',
+];
+
+function firefoxPreferences(downloads) {
+    return {
+        // The driver would give all files one origin; people's browsers do not.
+        'security.fileuri.strict_origin_policy': true,
+        'gfx.webrender.software': true,
+        'layers.acceleration.disabled': true,
+        'browser.download.folderList': 2,
+        'browser.download.dir': downloads,
+        'browser.download.useDownloadDir': true,
+        'browser.download.alwaysOpenPanel': false,
+        'browser.helperApps.neverAsk.saveToDisk': 'application/json,text/csv,text/html,text/plain',
+    };
+}
+
+/// Starts a browser. `preferences`: further ones for Firefox; `args`: further ones for Chromium.
+export async function startBrowser(name, { preferences = {}, args = [] } = {}) {
+    if (!existsSync(pageFile)) {
+        throw new Error(pageFile + ' is missing: build the target steelyard_page first');
+    }
+    const downloads = mkdtempSync(join(tmpdir(), 'steelyard-downloads-'));
+    const common = { headless: true, downloadBehavior: { policy: 'allow', downloadPath: downloads } };
+    const started =
+        name === 'firefox'
+            ? await puppeteer.launch({
+                  ...common,
+                  browser: 'firefox',
+                  executablePath: '/usr/bin/firefox-esr',
+                  extraPrefsFirefox: { ...firefoxPreferences(downloads), ...preferences },
+              })
+            : await puppeteer.launch({
+                  ...common,
+                  browser: 'chrome',
+                  executablePath: '/usr/bin/chromium',
+                  args: [...chromiumArguments, ...args],
+              });
+    return new Browser(name, started, downloads);
+}
+
+class Browser {
+    constructor(name, started, downloads) {
+        this.name = name;
+        this.puppeteer = started;
+        this.downloads = downloads;
+    }
+
+    /// What has been downloaded so far, by name; files still being written are left out.
+    downloaded() {
+        return readdirSync(this.downloads).filter((name) => !/\.(crdownload|part)$/.test(name));
+    }
+
+    /// Puts a text on the clipboard as a person does: typed somewhere else, marked, copied.
+    async fillClipboard(text) {
+        const tab = await this.puppeteer.newPage();
+        await tab.evaluate((value) => {
+            const area = document.body.appendChild(document.createElement('textarea'));
+            area.value = value;
+            area.select();
+        }, text);
+        await tab.keyboard.down('Control');
+        await tab.keyboard.down('KeyC', this.name === 'chromium' ? { commands: ['Copy'] } : {});
+        await tab.keyboard.up('KeyC');
+        await tab.keyboard.up('Control');
+        await tab.close();
+    }
+
+    /// What is on the clipboard, pasted somewhere else.
+    async readClipboard() {
+        const tab = await this.puppeteer.newPage();
+        await tab.evaluate(() => document.body.appendChild(document.createElement('textarea')).focus());
+        await tab.keyboard.down('Control');
+        await tab.keyboard.down('KeyV', this.name === 'chromium' ? { commands: ['Paste'] } : {});
+        await tab.keyboard.up('KeyV');
+        await tab.keyboard.up('Control');
+        const text = await tab.evaluate(() => document.querySelector('textarea').value);
+        await tab.close();
+        return text;
+    }
+
+    async close() {
+        await this.puppeteer.close();
+        rmSync(this.downloads, { recursive: true, force: true });
+    }
+}
+
+/// What the native command makes of a decision file.
+export function solveNatively(file) {
+    const ran = spawnSync(nativeCommand, ['solve', file], { encoding: 'utf8', maxBuffer: 64 * 1024 * 1024 });
+    if (ran.status !== 0) {
+        throw new Error('steelyard solve: ' + ran.stderr);
+    }
+    return JSON.parse(ran.stdout);
+}
