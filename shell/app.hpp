@@ -42,8 +42,9 @@ public:
     const Ledger& ledger() const;
     std::string results_file();
 
+    struct State; ///< In shell/app_state.hpp, for the parts of the frame.
+
 private:
-    struct State;
     std::unique_ptr<State> state_;
 };
 

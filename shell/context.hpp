@@ -13,8 +13,8 @@ ImGuiContext* make_context(float density);
 /// after it.
 void set_density(float density);
 
-/// Makes the soft rim of what is drawn into the current window from here on one device pixel wide; ImGui makes it one CSS
-/// pixel wide, which is a blur at high density. Call after each Begin and BeginChild.
+/// Makes the soft rim of what is drawn into the current window from here on one device pixel wide; ImGui
+/// makes it one CSS pixel wide, which is a blur at high density. Call after each Begin and BeginChild.
 void sharpen_edges();
 
 } // namespace steelyard

@@ -11,7 +11,7 @@ namespace {
 
 struct Face {
     const EmbeddedFont* font;
-    float line; // CSS pixels; whole, so that lines stay on whole pixels
+    float line; // CSS pixels
 };
 
 const std::array<Face, font_count> faces{{
@@ -23,11 +23,12 @@ const std::array<Face, font_count> faces{{
     {&text_medium, 47},
 }};
 
-const Face& face(Font which) {
-    return faces[static_cast<std::size_t>(which)];
+/// ImGui takes whole sizes only.
+float device_size(const Face& face, float density) {
+    return std::round(face.line * density);
 }
 
-void add_font(const EmbeddedFont& font, float device_size, bool merge) {
+void add_font(const EmbeddedFont& font, float size, bool merge) {
     ImFontConfig config;
     config.FontDataOwnedByAtlas = false;
     config.OversampleH = 1;
@@ -36,15 +37,15 @@ void add_font(const EmbeddedFont& font, float device_size, bool merge) {
     config.MergeMode = merge;
     // ImGui does not write to data it does not own.
     auto* bytes = const_cast<unsigned char*>(font.bytes.data());
-    ImGui::GetIO().Fonts->AddFontFromMemoryTTF(bytes, static_cast<int>(font.bytes.size()), device_size,
-                                               &config, font.ranges);
+    ImGui::GetIO().Fonts->AddFontFromMemoryTTF(bytes, static_cast<int>(font.bytes.size()), size, &config,
+                                               font.ranges);
 }
 
 /// Advances are rounded to whole pixels. A space rounded down lets words run together, which reads worse than
 /// a wide one, so spaces are rounded up from 0.3 on.
-void widen_spaces(ImFont& font, const Face& face, float density) {
+void widen_spaces(ImFont& font) {
     constexpr float space = 508.0F / 2048; // of the em, in Roboto Regular; Medium has 510
-    const float exact = space * em_of(face.line) * density;
+    const float exact = space * em_of(font.FontSize);
     for (ImFontGlyph& glyph : font.Glyphs) {
         if (glyph.Codepoint == ' ' || glyph.Codepoint == 0xA0) glyph.AdvanceX = std::floor(exact + 0.7F);
     }
@@ -58,7 +59,7 @@ ImFont* font(Font which) {
 }
 
 float font_size(Font which) {
-    return face(which).line;
+    return font(which)->FontSize * ImGui::GetIO().FontGlobalScale;
 }
 
 void build_fonts(float density) {
@@ -67,12 +68,11 @@ void build_fonts(float density) {
     io.Fonts->Clear();
     io.Fonts->Flags = ImFontAtlasFlags_NoBakedLines | ImFontAtlasFlags_NoMouseCursors;
     for (const Face& face : faces) {
-        add_font(*face.font, face.line * density, false);
-        add_font(symbols, face.line * density, true);
+        add_font(*face.font, device_size(face, density), false);
+        add_font(symbols, device_size(face, density), true);
     }
     io.Fonts->Build();
-    for (int i = 0; i < font_count; ++i)
-        widen_spaces(*io.Fonts->Fonts[i], faces[static_cast<std::size_t>(i)], density);
+    for (ImFont* font : io.Fonts->Fonts) widen_spaces(*font);
     io.FontGlobalScale = 1 / density;
 }
 

@@ -12,8 +12,9 @@
 namespace steelyard {
 namespace {
 
+/// Curved quotation marks: lines do not break beside them.
 std::string quoted(const std::string& name) {
-    return "\"" + name + "\"";
+    return "\xE2\x80\x9C" + name + "\xE2\x80\x9D";
 }
 
 /// Before a unit a space, before none nothing.

@@ -82,8 +82,8 @@ EMSCRIPTEN_KEEPALIVE void app_pointer_gone() {
     guarded([](Program& p) { p.pointer_gone(); });
 }
 
-EMSCRIPTEN_KEEPALIVE void app_button(int button, int down, int source) {
-    guarded([&](Program& p) { p.button(button, down != 0, source); });
+EMSCRIPTEN_KEEPALIVE void app_button(int button, int down, int source, double now) {
+    guarded([&](Program& p) { p.button(button, down != 0, source, now); });
 }
 
 EMSCRIPTEN_KEEPALIVE void app_wheel(float x, float y) {

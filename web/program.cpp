@@ -112,7 +112,8 @@ void Program::pointer_gone() {
     ImGui::GetIO().AddMousePosEvent(-FLT_MAX, -FLT_MAX);
 }
 
-void Program::button(int button, bool down, int source) {
+void Program::button(int button, bool down, int source, double now) {
+    take_queue(now);
     ImGuiIO& io = ImGui::GetIO();
     io.AddMouseSourceEvent(static_cast<ImGuiMouseSource>(source));
     io.AddMouseButtonEvent(button, down);

@@ -40,7 +40,9 @@ public:
 
     void pointer(float x, float y, int source);
     void pointer_gone();
-    void button(int button, bool down, int source);
+    /// What is queued is taken first: a drag's last place still counts, and a press finds the pointer where
+    /// it is.
+    void button(int button, bool down, int source, double now);
     void wheel(float x, float y);
     void modifiers(bool ctrl, bool shift, bool alt, bool meta);
     void key(const std::string& code, const std::string& key, bool down);

@@ -67,7 +67,8 @@ public:
         const Node* group = nullptr;
         for (const auto& placed : placed_nodes(d_.criteria)) {
             const Node& node = *placed.node;
-            if (!node.is_leaf())
+            // A goal without criteria is a leaf too, but nothing is asked of it yet.
+            if (!node.is_leaf() || (placed.parent == nullptr && node.rate == RateBy::pairs))
                 continue;
             if (placed.parent != group || model.rows.empty()) {
                 model.rows.push_back(section(section_title(placed.parent)));
@@ -167,27 +168,25 @@ private:
         Cell cell;
         cell.main = {figure_text(*now.value), Tone::plain};
         cell.range = range_text(now.low, now.high);
-        std::string said{word(now.status)};
         for (const Figure* before : superseded(entries)) {
             if (before->round == now.round && now.round)
                 continue;
-            const std::string change = change_text(*before->value, *now.value);
-            if (!change.empty())
-                said += (said.empty() ? "" : " ") + change;
+            cell.change = change_text(*before->value, *now.value);
             break;
         }
-        cell.small = {joined({now.round ? "round " + std::to_string(*now.round) : "", said}), Tone::quiet};
+        const std::string round = now.round ? "round " + std::to_string(*now.round) : std::string{};
+        cell.small = {joined({round, std::string(word(now.status))}), Tone::quiet};
         return cell;
     }
 
     Cell sheet_cell(const Node& leaf, const Option& option) const {
         const auto found = computed_.find({leaf.id, option.id});
         if (found == computed_.end())
-            return open_cell(option, "no costs in the sheet");
+            return open_cell(option, "no costs yet");
         Cell cell;
         // Cents of a sum over ten years are noise.
         cell.main = {figure_text(found->second, std::abs(found->second) >= 1000 ? 0 : 2), Tone::plain};
-        cell.small = {"from the cost sheet", Tone::quiet};
+        cell.small = {"by cost sheet", Tone::quiet};
         return cell;
     }
 
@@ -285,11 +284,12 @@ private:
     }
 
     Cell must_cell(const Requirement& must, const Option& option, RowKind kind) const {
+        // What is read from elsewhere is not to be entered here.
+        const bool entered = kind == RowKind::must_limit || kind == RowKind::must_yes_no;
         const auto found = musts_.find({must.id, option.id});
         if (found == musts_.end() || (found->second->state == MustState::unchecked && !found->second->value)) {
             Cell cell = open_cell(option);
-            // What has no limit, or is read from elsewhere, is not open here.
-            cell.open = cell.open && (kind == RowKind::must_limit || kind == RowKind::must_yes_no);
+            cell.open = cell.open && entered;
             return cell;
         }
         const MustResult& result = *found->second;
@@ -297,7 +297,7 @@ private:
         if (excluded_.contains({option.id, must.id}))
             state.text += dot + std::string("excluded");
         Cell cell;
-        cell.open = result.state == MustState::asked || result.state == MustState::undecided;
+        cell.open = entered && (result.state == MustState::asked || result.state == MustState::undecided);
         if (result.value) {
             cell.main = {kind == RowKind::must_node ? worth_text(*result.value) : figure_text(*result.value),
                          result.state == MustState::failed ? Tone::bad : Tone::plain};
@@ -361,8 +361,11 @@ std::string curve_words(const Curve& curve) {
     if (const auto* target = std::get_if<TargetCurve>(&curve.shape))
         return "full at " + figure_text(target->target) + ", none " + figure_text(target->tolerance) + " away";
     const auto& at = std::get<PointsCurve>(curve.shape).at;
-    return worth_text(at.front()[1]) + " at " + figure_text(at.front()[0]) + ", " + worth_text(at.back()[1]) +
-           " at " + figure_text(at.back()[0]);
+    const auto words = [](const std::array<double, 2>& point) {
+        const std::string worth = point[1] == 0 ? "none" : point[1] == 1 ? "full" : worth_text(point[1]);
+        return worth + " at " + figure_text(point[0]);
+    };
+    return at.size() == 1 ? words(at.front()) : words(at.front()) + ", " + words(at.back());
 }
 
 std::string limit_words(const Requirement& must) {

@@ -32,6 +32,7 @@ struct Words {
 /// One option in one row.
 struct Cell {
     Words main;
+    std::string change; ///< Against the figure superseded.
     std::string range;
     Words small;
     bool open = false; ///< Something is to be entered here.

@@ -5,7 +5,11 @@
 namespace steelyard {
 
 GrowingCard::GrowingCard(Ui& ui, ImVec2 at, float width, ImU32 ground, ImU32 border)
-    : ui_(ui), at_(at), width_(width), bottom_(at.y), border_(border != 0 ? border : ui.look().line),
+    : ui_(ui),
+      at_(at),
+      width_(width),
+      bottom_(at.y),
+      border_(border != 0 ? border : ui.look().line),
       paper_(ui, ground != 0 ? ground : ui.look().card) {
     // The ground is drawn last, when its height is known, and comes first all the same.
     ImDrawList* list = ImGui::GetWindowDrawList();
@@ -25,7 +29,9 @@ GrowingCard::~GrowingCard() {
 float GrowingCard::heading(std::string_view text) {
     draw_text(ui_, {left(), at_.y + 16}, text,
               {.font = Font::strong, .ink = ui_.look().quiet, .max_width = width()});
-    return end(at_.y + 16 + line_step(Font::strong) + 8);
+    const float below = at_.y + 16 + line_step(Font::strong) + 8;
+    end(below);
+    return below;
 }
 
 float GrowingCard::end(float content_bottom) {

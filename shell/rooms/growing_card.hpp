@@ -6,8 +6,8 @@
 
 namespace steelyard {
 
-/// A card that is as tall as what is drawn in it: draw while it lives, then say where the content ends. Not to be
-/// nested, and no scrolled area inside.
+/// A card that is as tall as what is drawn in it: draw while it lives, then say where the content ends. Not
+/// to be nested, and no scrolled area inside.
 class GrowingCard {
 public:
     static constexpr float padding = 20;

@@ -13,10 +13,24 @@ constexpr std::string_view no_break_space = "\xC2\xA0";
 
 /// What word processors and mail programs put before the lines of a list; the last is Word's own, of its
 /// private area.
-constexpr std::array<std::string_view, 18> bullets{
-    "-",            "*",            "+",            "\xE2\x80\xA2", "\xE2\x80\x93", "\xE2\x80\x94",
-    "\xC2\xB7",     "\xE2\x97\xA6", "\xE2\x96\xAA", "\xE2\x96\xAB", "\xE2\x96\xA0", "\xE2\x96\xA1",
-    "\xE2\x97\x8F", "\xE2\x97\x8B", "\xE2\x80\xA3", "\xE2\x81\x83", "\xE2\x9E\xA2", "\xEF\x82\xB7"};
+constexpr std::array<std::string_view, 18> bullets{"-",
+                                                   "*",
+                                                   "+",
+                                                   "\xE2\x80\xA2",
+                                                   "\xE2\x80\x93",
+                                                   "\xE2\x80\x94",
+                                                   "\xC2\xB7",
+                                                   "\xE2\x97\xA6",
+                                                   "\xE2\x96\xAA",
+                                                   "\xE2\x96\xAB",
+                                                   "\xE2\x96\xA0",
+                                                   "\xE2\x96\xA1",
+                                                   "\xE2\x97\x8F",
+                                                   "\xE2\x97\x8B",
+                                                   "\xE2\x80\xA3",
+                                                   "\xE2\x81\x83",
+                                                   "\xE2\x9E\xA2",
+                                                   "\xEF\x82\xB7"};
 
 bool is_digit(char c) {
     return c >= '0' && c <= '9';
@@ -27,14 +41,12 @@ bool is_small_letter(char c) {
 
 /// Bytes of white space at the beginning, 0 for none.
 std::size_t space_at(std::string_view text) {
-    if (text.starts_with(' ') || text.starts_with('\t'))
-        return 1;
+    if (text.starts_with(' ') || text.starts_with('\t')) return 1;
     return text.starts_with(no_break_space) ? no_break_space.size() : 0;
 }
 
 std::string_view trimmed_front(std::string_view text) {
-    while (const std::size_t space = space_at(text))
-        text.remove_prefix(space);
+    while (const std::size_t space = space_at(text)) text.remove_prefix(space);
     return text;
 }
 
@@ -60,10 +72,8 @@ std::pair<std::size_t, int> number_at(std::string_view text) {
     int parts = 0;
     while (end < text.size() && is_digit(text[end])) {
         ++parts;
-        while (end < text.size() && is_digit(text[end]))
-            ++end;
-        if (end + 1 < text.size() && text[end] == '.' && is_digit(text[end + 1]))
-            ++end;
+        while (end < text.size() && is_digit(text[end])) ++end;
+        if (end + 1 < text.size() && text[end] == '.' && is_digit(text[end + 1])) ++end;
     }
     return {end, parts};
 }
@@ -80,17 +90,13 @@ Marker counting_marker(std::string_view text) {
     const std::string_view inside = text.substr(bracket ? 1 : 0);
     auto [size, parts] = number_at(inside);
     if (size == 0) {
-        while (size < inside.size() && size < 4 && is_small_letter(inside[size]))
-            ++size;
+        while (size < inside.size() && size < 4 && is_small_letter(inside[size])) ++size;
         const bool roman = inside.substr(0, size).find_first_not_of("ivx") == std::string_view::npos;
-        if (size == 0 || (size > 1 && !roman))
-            return {};
+        if (size == 0 || (size > 1 && !roman)) return {};
     }
     const std::string_view after = inside.substr(size);
-    if (bracket)
-        return after.starts_with(')') ? Marker{size + 2, parts} : Marker{};
-    if (after.starts_with('.') || after.starts_with(')'))
-        return {size + 1, parts};
+    if (bracket) return after.starts_with(')') ? Marker{size + 2, parts} : Marker{};
+    if (after.starts_with('.') || after.starts_with(')')) return {size + 1, parts};
     return parts > 1 ? Marker{size, parts, false} : Marker{};
 }
 
@@ -110,13 +116,11 @@ Marker marker_of(std::string_view text) {
 
 /// A cell as spreadsheets quote it: "Price, ""delivered""".
 std::string unquoted(std::string_view cell) {
-    if (cell.size() < 2 || !cell.starts_with('"') || !cell.ends_with('"'))
-        return std::string(cell);
+    if (cell.size() < 2 || !cell.starts_with('"') || !cell.ends_with('"')) return std::string(cell);
     std::string text;
     for (std::size_t i = 1; i + 1 < cell.size(); ++i) {
         text += cell[i];
-        if (cell[i] == '"' && cell[i + 1] == '"' && i + 2 < cell.size())
-            ++i;
+        if (cell[i] == '"' && cell[i + 1] == '"' && i + 2 < cell.size()) ++i;
     }
     return text;
 }
@@ -134,8 +138,7 @@ std::vector<std::string_view> cells_of(std::string_view text) {
 std::string joined(const std::vector<std::string_view>& cells) {
     std::string text;
     for (const auto cell : cells) {
-        if (!cell.empty())
-            text += (text.empty() ? "" : " ") + unquoted(cell);
+        if (!cell.empty()) text += (text.empty() ? "" : " ") + unquoted(cell);
     }
     return text;
 }
@@ -150,20 +153,18 @@ struct Tail {
 
 /// Bytes of a minus sign at the end of a text, the hyphen or the real one.
 std::size_t minus_before(std::string_view text) {
-    if (text.ends_with('-'))
-        return 1;
+    if (text.ends_with('-')) return 1;
     return text.ends_with("\xE2\x88\x92") ? 3 : 0;
 }
 
 /// Takes a colon, an equals sign, a bar or a dash off the end; false if there is none. A colon between digits
 /// belongs to a ratio, a dash without a space before it to a word.
 bool take_separator(std::string_view& text, bool spaced) {
-    if (text.empty())
-        return false;
+    if (text.empty()) return false;
     if (std::string_view("=;|").find(text.back()) != std::string_view::npos || text.back() == ':') {
-        const bool ratio = text.back() == ':' && !spaced && text.size() > 1 && is_digit(text[text.size() - 2]);
-        if (!ratio)
-            text.remove_suffix(1);
+        const bool ratio =
+            text.back() == ':' && !spaced && text.size() > 1 && is_digit(text[text.size() - 2]);
+        if (!ratio) text.remove_suffix(1);
         return !ratio;
     }
     for (const std::string_view dash : {"-", "\xE2\x80\x93", "\xE2\x80\x94"}) {
@@ -178,25 +179,31 @@ bool take_separator(std::string_view& text, bool spaced) {
     return false;
 }
 
+/// The digits a text ends in, with one decimal mark among them; empty if there are none, or more marks.
+std::string_view digits_at_end(std::string_view text) {
+    std::size_t begin = text.size();
+    while (begin > 0 && (is_digit(text[begin - 1]) || text[begin - 1] == '.' || text[begin - 1] == ','))
+        --begin;
+    std::string_view digits = text.substr(begin);
+    if (digits.starts_with(',')) digits.remove_prefix(1); // The separator of "Price,40".
+    const auto marks =
+        digits.size() - static_cast<std::size_t>(std::count_if(digits.begin(), digits.end(), is_digit));
+    const bool plain = !digits.empty() && is_digit(digits.back()) && marks <= 1 && marks < digits.size();
+    return plain ? digits : std::string_view{};
+}
+
 std::optional<Tail> number_tail(std::string_view text) {
     Tail tail;
     const bool bracket = text.ends_with(')') || text.ends_with(']');
-    if (bracket)
-        text = trimmed_back(text.substr(0, text.size() - 1));
+    if (bracket) text = trimmed_back(text.substr(0, text.size() - 1));
     tail.percent = text.ends_with('%');
-    if (tail.percent)
-        text = trimmed_back(text.substr(0, text.size() - 1));
+    if (tail.percent) text = trimmed_back(text.substr(0, text.size() - 1));
 
-    std::size_t begin = text.size();
-    while (begin > 0 && (is_digit(text[begin - 1]) ||
-                         ((text[begin - 1] == '.' || text[begin - 1] == ',') && begin < text.size())))
-        --begin;
-    const std::string_view digits = text.substr(begin);
-    const auto value = digits.empty() || !is_digit(digits.front()) ? std::nullopt : read_number(digits);
-    if (!value)
-        return std::nullopt;
+    const std::string_view digits = digits_at_end(text);
+    const auto value = digits.empty() ? std::nullopt : read_number(digits);
+    if (!value) return std::nullopt;
     tail.value = *value;
-    text = text.substr(0, begin);
+    text.remove_suffix(digits.size());
 
     const std::string_view apart = trimmed_back(text);
     const std::size_t minus = apart.size() == text.size() ? minus_before(text) : 0;
@@ -204,8 +211,7 @@ std::optional<Tail> number_tail(std::string_view text) {
         const std::string_view rest = text.substr(0, text.size() - minus);
         const bool of_a_word = !rest.empty() && trimmed_back(rest).size() == rest.size() && !bracket &&
                                std::string_view(":=;|").find(rest.back()) == std::string_view::npos;
-        if (of_a_word)
-            return std::nullopt;
+        if (of_a_word) return std::nullopt;
         tail.value = -tail.value;
         text = rest;
     }
@@ -213,13 +219,14 @@ std::optional<Tail> number_tail(std::string_view text) {
     const bool spaced = name.size() < text.size();
     tail.marked = tail.percent;
     if (bracket) {
-        if (!name.ends_with('(') && !name.ends_with('['))
-            return std::nullopt;
+        if (!name.ends_with('(') && !name.ends_with('[')) return std::nullopt;
         name = trimmed_back(name.substr(0, name.size() - 1));
         tail.marked = true;
     } else if (take_separator(name, spaced)) {
         name = trimmed_back(name);
         tail.marked = true;
+    } else if (name.ends_with(',')) {
+        name = trimmed_back(name.substr(0, name.size() - 1));
     } else if (!spaced && !name.empty()) {
         return std::nullopt; // The end of a word: T480.
     }
@@ -236,8 +243,7 @@ std::optional<Tail> number_cell(std::string_view cell) {
 } // namespace
 
 std::vector<std::string_view> text_lines(std::string_view text) {
-    if (text.starts_with("\xEF\xBB\xBF"))
-        text.remove_prefix(3);
+    if (text.starts_with("\xEF\xBB\xBF")) text.remove_prefix(3);
     std::vector<std::string_view> lines;
     while (!text.empty()) {
         const std::size_t end = std::min(text.find_first_of("\r\n"), text.size());
@@ -271,7 +277,7 @@ OutlineLine read_line(std::string_view text, std::size_t number) {
 void strip_marker(OutlineLine& line, bool numbered) {
     const Marker marker = marker_of(line.text);
     if (marker.size > 0 && (marker.sure || numbered))
-        line.text = trimmed_front(std::string_view(line.text).substr(marker.size));
+        line.text = std::string(trimmed_front(std::string_view(line.text).substr(marker.size)));
 }
 
 void split_weight(OutlineLine& line, bool weights) {
@@ -286,10 +292,15 @@ void split_weight(OutlineLine& line, bool weights) {
         line.percent = tail->percent;
         line.may_be_name = !own_column && !tail->marked;
     }
-    if (is_weight && own_column)
+    if (is_weight && own_column) {
         cells.pop_back();
-    const std::string name(is_weight && !own_column ? tail->before : std::string_view(joined(cells)));
-    line.text = name;
+        const std::string name = joined(cells);
+        std::string_view bare = name;
+        take_separator(bare, false); // "Price:" in a column of its own.
+        line.text = std::string(trimmed_back(bare));
+    } else {
+        line.text = is_weight ? std::string(tail->before) : line.with_number;
+    }
 }
 
 } // namespace steelyard

@@ -1,15 +1,24 @@
 // Debian's Chromium and Firefox, headless, without graphics acceleration, each with a profile of its own.
 
 import { spawnSync } from 'node:child_process';
-import { existsSync, mkdtempSync, readdirSync, rmSync } from 'node:fs';
+import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
 import puppeteer from 'puppeteer-core';
 
+// STEELYARD_PAGES names another folder of built pages.
+function builtPage(name) {
+    const folder = process.env.STEELYARD_PAGES ?? fileURLToPath(new URL('../../build/web', import.meta.url));
+    return join(folder, name + '.html');
+}
+
 /// The release file: what is built is what is tested.
-export const pageFile = process.env.STEELYARD_PAGE ?? fileURLToPath(new URL('../../build/web/steelyard.html', import.meta.url));
+export const pageFile = builtPage('steelyard');
+
+/// The page around a shell that only shows what the page does for it (probe/probe.cpp).
+export const probeFile = builtPage('probe');
 
 /// The native command, for comparing what the page saves and shows.
 export const nativeCommand = fileURLToPath(new URL('../../build/native/steelyard', import.meta.url));
@@ -37,11 +46,8 @@ function firefoxPreferences(downloads) {
 
 /// Starts a browser. `preferences`: further ones for Firefox; `args`: further ones for Chromium.
 export async function startBrowser(name, { preferences = {}, args = [] } = {}) {
-    if (!existsSync(pageFile)) {
-        throw new Error(pageFile + ' is missing: build the target steelyard_page first');
-    }
     const downloads = mkdtempSync(join(tmpdir(), 'steelyard-downloads-'));
-    const common = { headless: true, downloadBehavior: { policy: 'allow', downloadPath: downloads } };
+    const common = { headless: true, defaultViewport: null, downloadBehavior: { policy: 'allow', downloadPath: downloads } };
     const started =
         name === 'firefox'
             ? await puppeteer.launch({

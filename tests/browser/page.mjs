@@ -35,10 +35,11 @@ function removeSavePicker() {
     delete window.showSaveFilePicker;
 }
 
-/// Options: path (the file; the built page), width, height, density, before (functions that run in the page before its scripts,
-/// each a function or [function, argument]), savePicker (true keeps the dialog), waitForStart (false: not).
+/// Options: path (the file; the built page), width, height, density (0: the browser's own window), before (functions that run in the page before its scripts,
+/// each a function or [function, argument]), savePicker (true keeps the dialog), waitForStart (false: not), context (tabs of one
+/// context share what is kept).
 export async function openPage(browser, options = {}) {
-    const tab = await browser.puppeteer.newPage();
+    const tab = await (options.context ?? browser.puppeteer).newPage();
     const page = new SteelyardPage(browser, tab, pathToFileURL(options.path ?? pageFile).href);
     await page.open(options);
     return page;
@@ -64,10 +65,9 @@ class SteelyardPage {
         });
     }
 
-    async open({ width = 1280, height = 720, density = 1, before = [], savePicker = false, waitForStart = true, dark } = {}) {
-        await this.resize(width, height, density);
-        if (dark !== undefined) {
-            await this.tab.emulateMediaFeatures([{ name: 'prefers-color-scheme', value: dark ? 'dark' : 'light' }]);
+    async open({ width = 1280, height = 720, density = 1, before = [], savePicker = false, waitForStart = true } = {}) {
+        if (density > 0) {
+            await this.resize(width, height, density);
         }
         const scripts = [collectViolations, ...(savePicker ? [] : [removeSavePicker]), ...before];
         for (const script of scripts) {

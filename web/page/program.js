@@ -117,7 +117,7 @@ function makeProgramCalls(module, stopped) {
 
         pointer: (x, y, source) => call('app_pointer', x, y, source),
         pointerGone: () => call('app_pointer_gone'),
-        button: (which, down, source) => call('app_button', which, down ? 1 : 0, source),
+        button: (which, down, source) => call('app_button', which, down ? 1 : 0, source, now()),
         wheel: (x, y) => call('app_wheel', x, y),
         modifiers: (ctrl, shift, alt, meta) => call('app_modifiers', ctrl ? 1 : 0, shift ? 1 : 0, alt ? 1 : 0, meta ? 1 : 0),
         key: (code, key, down) => withBytes([code, key], (c, k) => call('app_key', c, k, down ? 1 : 0)),

@@ -21,7 +21,6 @@ function makeTouch(program, view, focus) {
     function takeBack() {
         timer = clearTimeout(timer);
         program.pointerGone();
-        program.settle();
         program.button(0, false, source);
         program.settle();
     }
@@ -30,9 +29,7 @@ function makeTouch(program, view, focus) {
         takeBack();
         gesture = 'over';
         program.pointer(start.x, start.y, source);
-        program.settle();
         program.button(1, true, source);
-        program.settle();
         program.button(1, false, source);
         step();
     }
@@ -55,9 +52,7 @@ function makeTouch(program, view, focus) {
             gesture = 'press';
             start = at(event);
             timer = setTimeout(held, holdTime);
-            // The place before the press: what is there has to know that it is pointed at.
             program.pointer(start.x, start.y, source);
-            program.settle();
             program.button(0, true, source);
             step();
         } else if (fingers.size === 2 && gesture === 'press') {

@@ -103,10 +103,16 @@ function makeView(canvas, program) {
     }
 
     function measure(entry) {
-        const box = entry && entry.devicePixelContentBoxSize && entry.devicePixelContentBoxSize[0];
-        let density = window.devicePixelRatio || 1;
-        let width = box ? box.inlineSize : Math.round(canvas.clientWidth * density);
-        let height = box ? box.blockSize : Math.round(canvas.clientHeight * density);
+        const box = entry.devicePixelContentBoxSize && entry.devicePixelContentBoxSize[0];
+        let density = window.devicePixelRatio;
+        let width = Math.round(entry.contentRect.width * density);
+        let height = Math.round(entry.contentRect.height * density);
+        // The browser's own count is exact where a pixel is cut by the window's edge. Where a density is only played (by
+        // developer tools) it is that of the real screen: not to be used.
+        if (box && Math.abs(box.inlineSize - width) <= 2 && Math.abs(box.blockSize - height) <= 2) {
+            width = box.inlineSize;
+            height = box.blockSize;
+        }
         const pixels = width * height;
         if (pixels > mostPixels) {
             const less = Math.sqrt(mostPixels / pixels);

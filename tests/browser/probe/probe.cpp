@@ -149,6 +149,9 @@ struct App::State {
             keys += io.KeyShift ? "redo " : io.KeyCtrl ? "undo " : "z ";
         if (!io.WantTextInput && ImGui::IsKeyPressed(ImGuiKey_5, false)) keys += "5 ";
         if (ImGui::IsKeyPressed(ImGuiKey_S, false) && io.KeyCtrl) keys += "save ";
+        show("size", number(double(io.DisplaySize.x)) + " x " + number(double(io.DisplaySize.y)) + " at " +
+                         number(double(io.DisplayFramebufferScale.x)));
+        show("clicks", std::to_string(clicks));
         show("id", id);
         show("claim", claim);
         show("stored", stored);
@@ -158,12 +161,9 @@ struct App::State {
         show("file", file);
         show("opened", opened);
         show("pasted", pasted);
-        show("clicks", std::to_string(clicks));
         show("right clicks", std::to_string(right_clicks));
         show("keys", keys);
         show("scheme", scheme);
-        show("size", number(double(io.DisplaySize.x)) + " x " + number(double(io.DisplaySize.y)) + " at " +
-                         number(double(io.DisplayFramebufferScale.x)));
         ImGui::BeginChild("rows", ImVec2(300, 100));
         for (int row = 0; row < 50; ++row) ImGui::Text("row %d", row);
         const float scrolled = ImGui::GetScrollY();

@@ -183,8 +183,7 @@ TEST_CASE("results file: cycles, misfits and limits of a larger set") {
     const JsonValue results = results_of(R"({"format": "steelyard-decision", "version": 1,
         "options": [{"id": "o1"}, {"id": "o2"}, {"id": "o3"}], "criteria": {"id": "goal"},
         "judgments": [{"set": "goal", "a": "o1", "b": "o2", "ratio": 2}, {"set": "goal", "a": "o2", "b": "o3", "ratio": 2},
-                      {"set": "goal", "a": "o3", "b": "o1", "ratio": 2}],
-        "settings": {"money": null}})");
+                      {"set": "goal", "a": "o3", "b": "o1", "ratio": 2}]})");
     const JsonValue& set = at(results, {"sets", "0"});
     CHECK(compact(at(set, {"cycles"})) == R"([["o1","o2","o3"]])");
     CHECK(at(set, {"misfits"}).items.size() == 3);

@@ -17,17 +17,17 @@ constexpr std::uint32_t ground = 0xFF403020;
 constexpr int width = 300;
 constexpr int height = 200;
 
-Painter new_painter() {
-    const TestAtlas atlas;
-    Painter painter;
-    painter.set_atlas(atlas.alpha.data(), TestAtlas::width, TestAtlas::height);
-    return painter;
-}
+class NewPainter : public Painter {
+public:
+    NewPainter() {
+        const TestAtlas atlas;
+        set_atlas(atlas.alpha.data(), TestAtlas::width, TestAtlas::height);
+    }
+};
 
 bool holds(const std::vector<PixelRect>& rects, int x, int y) {
     for (const PixelRect& rect : rects) {
-        if (x >= rect.left && x < rect.right && y >= rect.top && y < rect.bottom)
-            return true;
+        if (x >= rect.left && x < rect.right && y >= rect.top && y < rect.bottom) return true;
     }
     return false;
 }
@@ -46,8 +46,7 @@ int differing_outside(const std::vector<std::uint32_t>& before, const Painter& p
     for (int y = 0; y < painter.height(); ++y) {
         for (int x = 0; x < painter.width(); ++x) {
             const auto at = static_cast<std::size_t>(y * painter.width() + x);
-            if (before[at] != painter.pixels()[at] && !holds(changed, x, y))
-                ++found;
+            if (before[at] != painter.pixels()[at] && !holds(changed, x, y)) ++found;
         }
     }
     return found;
@@ -56,7 +55,7 @@ int differing_outside(const std::vector<std::uint32_t>& before, const Painter& p
 TEST_CASE("the first frame, a new size, a new ground and a new atlas change everything; nothing else does") {
     DrawLists lists(width, height, 1);
     lists.rectangle({10, 10}, {20, 20}, 0xFF0000FF);
-    Painter painter = new_painter();
+    NewPainter painter;
     const std::int64_t all = std::int64_t{width} * height;
     CHECK(area(painter.paint(lists.data(), width, height, ground)) == all);
     CHECK(painter.paint(lists.data(), width, height, ground).empty());
@@ -69,7 +68,7 @@ TEST_CASE("the first frame, a new size, a new ground and a new atlas change ever
 }
 
 TEST_CASE("a small change is reported as a small rectangle on the screen") {
-    Painter painter = new_painter();
+    NewPainter painter;
     DrawLists before(width, height, 1);
     before.rectangle({290, 190}, {295, 195}, 0xFF0000FF);
     painter.paint(before.data(), width, height, ground);
@@ -83,7 +82,7 @@ TEST_CASE("a small change is reported as a small rectangle on the screen") {
 }
 
 TEST_CASE("what changes wholly behind an opaque rectangle is not painted again") {
-    Painter painter = new_painter();
+    NewPainter painter;
     for (int frame = 0; frame < 2; ++frame) {
         DrawLists lists(width, height, 1);
         lists.rectangle({0, 0}, {width, height}, frame == 0 ? 0xFF0000FF : 0xFF00FF00);
@@ -94,7 +93,7 @@ TEST_CASE("what changes wholly behind an opaque rectangle is not painted again")
 }
 
 TEST_CASE("a long slanted line touches few tiles") {
-    Painter painter = new_painter();
+    NewPainter painter;
     const auto line = [](float shift) {
         DrawLists lists(1280, 1280, 1);
         const ImU32 colour = 0xFF0000FF;
@@ -112,22 +111,21 @@ TEST_CASE("a long slanted line touches few tiles") {
 TEST_CASE("frames painted one after another are the frames painted afresh") {
     int partial = 0;
     for (std::uint64_t seed = 1; seed <= 12; ++seed) {
-        Painter painter = new_painter();
+        NewPainter painter;
         std::vector<std::uint32_t> before(std::size_t{width} * height, 0);
         for (std::uint64_t frame = 0; frame < 6; ++frame) {
             // The same drawing every time, with a few more shapes in each frame.
             Dice dice(seed);
             DrawLists lists = random_drawing(dice, width, height, 1, 20 + 2 * static_cast<int>(frame));
             const auto& changed = painter.paint(lists.data(), width, height, ground);
-            Painter afresh = new_painter();
+            NewPainter afresh;
             afresh.paint(lists.data(), width, height, ground);
             INFO("seed " << seed << " frame " << frame);
             CHECK(painter.pixels() == afresh.pixels());
             CHECK(differing_outside(before, painter, changed) == 0);
             CHECK(area(changed) <= std::int64_t{width} * height);
             before = painter.pixels();
-            if (frame > 0 && area(changed) < std::int64_t{width} * height)
-                ++partial;
+            if (frame > 0 && area(changed) < std::int64_t{width} * height) ++partial;
         }
     }
     // Else the test would not have met what it is about.
@@ -143,7 +141,8 @@ TEST_CASE("on a real screen a bar that grows repaints little, and the picture is
     const int screen_height = screen.device_height();
     painter.paint(screen.draw(0), screen_width, screen_height, SampleScreen::background);
     const auto before = painter.pixels();
-    const auto& changed = painter.paint(screen.draw(30), screen_width, screen_height, SampleScreen::background);
+    const auto& changed =
+        painter.paint(screen.draw(30), screen_width, screen_height, SampleScreen::background);
     CHECK(before != painter.pixels());
     CHECK(differing_outside(before, painter, changed) == 0);
     CHECK(area(changed) <= 12 * 64 * 64);

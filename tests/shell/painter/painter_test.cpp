@@ -37,8 +37,7 @@ std::vector<std::uint32_t> painted(DrawLists& lists, int width, int height) {
 std::vector<std::uint32_t> drawn(const std::vector<std::string>& lines, std::uint32_t colour) {
     std::vector<std::uint32_t> pixels;
     for (const std::string& line : lines) {
-        for (const char c : line)
-            pixels.push_back(c == '#' ? colour : ground);
+        for (const char c : line) pixels.push_back(c == '#' ? colour : ground);
     }
     return pixels;
 }
@@ -126,7 +125,8 @@ TEST_CASE("a letter is the atlas's alpha, texel by pixel") {
 }
 
 TEST_CASE("letters between pixels go to the nearest, all of a line to the same side") {
-    // At density 1.25 a line that begins at 2 lies at half a pixel; a float's error must not part its letters.
+    // At density 1.25 a line that begins at 2 lies at half a pixel; a float's error must not part its
+    // letters.
     const auto picture = [](float error) {
         DrawLists lists(32, 8, 1.25F);
         lists.picture({2 + error, 0.1F}, {6 + error, 4.1F}, {10, 5}, {15, 10}, 0xFFFFFFFF);
@@ -198,18 +198,16 @@ TEST_CASE("corners far out and corners that are no numbers do no harm") {
     lists.clip(nan, nan, nan, nan);
     lists.rectangle({0, 0}, {6, 3}, 0xFF00FF00);
     const auto pixels = painted(lists, 6, 3);
-    for (std::size_t x = 0; x < 6; ++x)
-        CHECK((pixels[6 + x] & 0xFF) > 0x80);
-    CHECK(greatest_difference(pixels, pixels) == 0);
+    for (std::size_t x = 0; x < 6; ++x) CHECK((pixels[6 + x] & 0xFF) > 0x80);
 }
 
-TEST_CASE("without an atlas plain shapes are painted and letters are not") {
+TEST_CASE("without an atlas everything is plain") {
     DrawLists lists(4, 1, 1);
     lists.rectangle({0, 0}, {1, 1}, red);
     lists.picture({2, 0}, {3, 1}, {10, 5}, {11, 6}, red);
     Painter painter;
     painter.paint(lists.data(), 4, 1, ground);
-    CHECK(painter.pixels() == drawn({"#..."}, red));
+    CHECK(painter.pixels() == drawn({"#.#."}, red));
 }
 
 TEST_CASE("random drawings come out as the slow painter paints them") {

@@ -11,12 +11,14 @@ constexpr int beside = 20; // CSS pixels that corners may lie outside
 class Artist {
 public:
     Artist(Dice& dice, int width, int height, float density)
-        : dice_(dice), width_(width), height_(height), density_(density),
+        : dice_(dice),
+          width_(width),
+          height_(height),
+          density_(density),
           drawing_(static_cast<float>(width), static_cast<float>(height), density) {}
 
     DrawLists draw(int count) {
-        for (int i = 0; i < count; ++i)
-            add();
+        for (int i = 0; i < count; ++i) add();
         return std::move(drawing_);
     }
 
@@ -24,30 +26,14 @@ private:
     void add() {
         switch (dice_.below(10)) {
         case 0:
-        case 1:
-            drawing_.rectangle(point(), point(), random_colour(dice_));
-            break;
-        case 2:
-            letter();
-            break;
-        case 3:
-            stretched_picture();
-            break;
-        case 4:
-            soft_triangle();
-            break;
-        case 5:
-            mixed_triangle();
-            break;
-        case 6:
-            textured_triangle();
-            break;
-        case 7:
-            fan();
-            break;
-        case 8:
-            clip();
-            break;
+        case 1: rectangle(); break;
+        case 2: letter(); break;
+        case 3: stretched_picture(); break;
+        case 4: soft_triangle(); break;
+        case 5: mixed_triangle(); break;
+        case 6: textured_triangle(); break;
+        case 7: fan(); break;
+        case 8: clip(); break;
         default:
             if (dice_.chance(50))
                 drawing_.next_list();
@@ -57,7 +43,9 @@ private:
     }
 
     /// 1/16 CSS pixel is 5/64 device pixel at density 1.25.
-    float place(int size) { return static_cast<float>(dice_.between(-16 * beside, 16 * (size + beside))) / 16; }
+    float place(int size) {
+        return static_cast<float>(dice_.between(-16 * beside, 16 * (size + beside))) / 16;
+    }
 
     ImVec2 point() {
         const float x = place(width_);
@@ -68,11 +56,15 @@ private:
     /// Some rows of corners are level or upright, as in drawings of interfaces.
     std::array<ImVec2, 3> points() {
         std::array<ImVec2, 3> found{point(), point(), point()};
-        if (dice_.chance(30))
-            found[1].y = found[0].y;
-        if (dice_.chance(30))
-            found[2].x = found[1].x;
+        if (dice_.chance(30)) found[1].y = found[0].y;
+        if (dice_.chance(30)) found[2].x = found[1].x;
         return found;
+    }
+
+    void rectangle() {
+        const ImVec2 from = point();
+        const ImVec2 to = point();
+        drawing_.rectangle(from, to, random_colour(dice_));
     }
 
     ImVec2 texel() {
@@ -146,18 +138,17 @@ private:
             }
         } else {
             const int count = dice_.between(3, 8);
-            for (int i = 0; i < count; ++i)
-                corners.push_back(point());
+            for (int i = 0; i < count; ++i) corners.push_back(point());
         }
-        if (dice_.chance(50))
-            std::reverse(corners.begin(), corners.end());
+        if (dice_.chance(50)) std::reverse(corners.begin(), corners.end());
         drawing_.fan(corners, random_colour(dice_));
     }
 
     void clip() {
         const ImVec2 a = point();
         const ImVec2 b = point();
-        drawing_.clip(std::min(a.x, b.x), std::min(a.y, b.y), std::max(a.x, b.x) + 30, std::max(a.y, b.y) + 20);
+        drawing_.clip(std::min(a.x, b.x), std::min(a.y, b.y), std::max(a.x, b.x) + 30,
+                      std::max(a.y, b.y) + 20);
     }
 
     Dice& dice_;
@@ -171,10 +162,8 @@ private:
 
 ImU32 random_colour(Dice& dice) {
     const auto channels = static_cast<ImU32>(dice.below(1 << 24));
-    if (dice.chance(40))
-        return channels | 0xFF000000U;
-    if (dice.chance(10))
-        return channels;
+    if (dice.chance(40)) return channels | 0xFF000000U;
+    if (dice.chance(10)) return channels;
     return channels | (static_cast<ImU32>(dice.below(256)) << 24);
 }
 

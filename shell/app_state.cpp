@@ -1,0 +1,189 @@
+#include "shell/app_state.hpp"
+
+#include <utility>
+
+#include "core/decision/lookup.hpp"
+#include "core/decision/read.hpp"
+#include "core/results/write_results.hpp"
+#include "shell/example.hpp"
+
+namespace steelyard {
+namespace {
+
+const Id& example_id() {
+    static const Id id = read_decision(example_decision()).decision->id;
+    return id;
+}
+
+} // namespace
+
+bool App::State::is_example() const {
+    return session.decision().id == example_id();
+}
+
+RoomView App::State::view() {
+    if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
+    return {session.decision(), session.results(), person, keeper.read_only()};
+}
+
+void App::State::open(Decision decision, const std::string& key, std::uint64_t stored_revision,
+                      const std::string& stored_at) {
+    session.open(std::move(decision));
+    person.clear();
+    asked.reset();
+    for (auto& r : rooms) r->reset();
+    ui.drafts.clear();
+    keeper.opened(key, session.revision(), stored_revision, stored_at);
+    platform.set_title(session.decision().title);
+    fresh_frames = 2;
+}
+
+void App::State::open_file(const std::string& name, const std::string& text) {
+    fresh_frames = 2;
+    ReadResult read = read_decision(text);
+    if (!read.decision) {
+        Refusal refused{name, {}};
+        for (const auto& problem : read.problems) refused.reasons.push_back(sentence(problem));
+        refusal = std::move(refused);
+        return;
+    }
+    keeper.flush(session);
+    const std::string key = read.decision->id.empty() ? platform.new_id() : read.decision->id;
+    ++waiting;
+    platform.load_kept(key, [this, key, text, name, decision = std::move(*read.decision)](
+                                std::optional<StoredDecision> held, const std::string& problem) {
+        --waiting;
+        const std::uint64_t revision = held ? held->revision : 0;
+        open(decision, key, revision, {});
+        message = problem.empty() ? "Opened " + name + "." : problem;
+        if (!held || held->text == text) return;
+        // The browser held another state of the same decision. It stays, under a key of its own.
+        StoredDecision other = *held;
+        other.id = platform.new_id();
+        other.title += " (kept here before a file was opened)";
+        other.revision = 1;
+        ++waiting;
+        platform.store(other, [this](SaveOutcome outcome) {
+            --waiting;
+            message += outcome.saved
+                           ? " The state this browser held before is kept beside it."
+                           : " The state this browser held before could not be kept: " + outcome.problem;
+        });
+    });
+}
+
+void App::State::start_empty() {
+    keeper.flush(session);
+    Decision empty;
+    empty.id = platform.new_id();
+    empty.title = "Untitled decision";
+    empty.criteria.id = "goal";
+    empty.criteria.name = "Goal";
+    const Id key = empty.id;
+    open(std::move(empty), key, 0, {});
+    room = RoomId::frame;
+    message = "A new decision. The one before is kept in this browser.";
+}
+
+void App::State::open_kept(const std::string& id) {
+    keeper.flush(session);
+    ++waiting;
+    platform.load_kept(id, [this](std::optional<StoredDecision> held, const std::string& problem) {
+        --waiting;
+        fresh_frames = 2;
+        started = true;
+        if (!held) {
+            message = problem.empty() ? "This decision is no longer kept here." : problem;
+            if (session.decision().criteria.id.empty()) start_empty();
+            return;
+        }
+        // What comes from the store is as untrusted as a file.
+        ReadResult read = read_decision(held->text);
+        if (!read.decision) {
+            Refusal refused{held->title, {}};
+            for (const auto& p : read.problems) refused.reasons.push_back(sentence(p));
+            refusal = std::move(refused);
+            if (session.decision().criteria.id.empty()) start_empty();
+            return;
+        }
+        open(std::move(*read.decision), held->id, held->revision, held->saved_at);
+    });
+}
+
+void App::State::show_kept() {
+    keeper.flush(session);
+    ++waiting;
+    platform.list_kept([this](std::vector<KeptDecision> list, const std::string& problem) {
+        --waiting;
+        fresh_frames = 2;
+        if (!problem.empty()) message = problem;
+        kept = std::move(list);
+        kept_open = true;
+    });
+}
+
+void App::State::save_file() {
+    keeper.save_file(session, [this](const SaveOutcome& outcome) {
+        fresh_frames = 2;
+        if (outcome.saved) message = "Saved to a file.";
+        if (!outcome.saved && !outcome.cancelled) message = "Not saved to a file: " + outcome.problem;
+    });
+}
+
+void App::State::save_results() {
+    const std::string name = steelyard::file_name(session.decision().title, platform.now(), ".results.json");
+    ++waiting;
+    platform.save_file(name, "application/json", write_results(session.decision(), session.results()),
+                       [this](const SaveOutcome& outcome) {
+                           --waiting;
+                           fresh_frames = 2;
+                           if (outcome.saved) message = "The results file is saved.";
+                           if (!outcome.saved && !outcome.cancelled) {
+                               message = "The results file is not saved: " + outcome.problem;
+                           }
+                       });
+}
+
+void App::State::carry_out(Actions& actions) {
+    if (!actions.message.empty()) message = std::move(actions.message);
+    if (actions.answers.wanted) person = actions.answers.person;
+    if (!actions.to_copy.empty()) platform.copy_text(actions.to_copy);
+    for (auto& step : actions.steps) apply(std::move(step));
+    if (actions.go_to.wanted) {
+        room = actions.go_to.room;
+        if (!actions.go_to.focus.empty()) rooms[static_cast<std::size_t>(room)]->show(actions.go_to.focus);
+        fresh_frames = 2;
+    }
+}
+
+void App::State::apply(Actions::Step step) {
+    if (keeper.read_only()) return;
+    fresh_frames = 2;
+    const Applied applied = steelyard::apply(session.decision(), step.edits);
+    if (applied.problems.empty() && applied.losses.any() && !asked) {
+        asked = AskedStep{std::move(step), sentence(applied.losses)};
+        return;
+    }
+    const auto outcome = session.apply(step.edits, stamp(), std::move(step.label));
+    if (!outcome.problems.empty()) message = sentence(outcome.problems.front());
+    if (outcome.changed) {
+        message.clear();
+        platform.set_title(session.decision().title);
+    }
+}
+
+void App::State::undo() {
+    if (keeper.read_only()) return;
+    const std::string label = session.history().undo_label();
+    if (session.undo(stamp())) message = "Undone: " + label;
+    fresh_frames = 2;
+}
+
+void App::State::redo() {
+    if (keeper.read_only()) return;
+    const std::string label = session.history().redo_label();
+    if (session.redo(stamp())) message = "Done again: " + label;
+    fresh_frames = 2;
+}
+
+} // namespace steelyard

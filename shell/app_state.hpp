@@ -1,0 +1,75 @@
+#pragma once
+
+#include <array>
+#include <memory>
+#include <string>
+#include <vector>
+
+#include "core/results/session.hpp"
+#include "shell/app.hpp"
+#include "shell/file_keeper.hpp"
+#include "shell/rooms/room.hpp"
+#include "shell/ui.hpp"
+
+namespace steelyard {
+
+/// Edits that take entries away and wait for the person's word.
+struct AskedStep {
+    Actions::Step step;
+    std::string losses;
+};
+
+/// A file that was refused.
+struct Refusal {
+    std::string name;
+    std::vector<std::string> reasons;
+};
+
+struct App::State {
+    explicit State(Platform& p) : platform(p), session(Decision{}), keeper(p) {}
+
+    Platform& platform;
+    Session session;
+    FileKeeper keeper;
+    Ui ui;
+    std::array<std::unique_ptr<Room>, 6> rooms;
+    RoomId room = RoomId::frame;
+    Id person; ///< Who answers now; empty: agreed in the room.
+    bool started = false;
+    bool standing_open = false; ///< On narrow pages: the standing is laid over the room.
+
+    std::string message;
+    std::optional<AskedStep> asked;
+    std::optional<Refusal> refusal;
+    bool kept_open = false;
+    std::vector<KeptDecision> kept;
+    int waiting = 0;      ///< Platform calls unanswered.
+    int fresh_frames = 2; ///< Frames still to draw after something changed outside of input.
+
+    bool is_example() const;
+    RoomView view();
+    void open(Decision decision, const std::string& key, std::uint64_t stored_revision,
+              const std::string& stored_at);
+    void open_file(const std::string& name, const std::string& text);
+    void start_empty();
+    void open_kept(const std::string& id);
+    void show_kept();
+    void save_file();
+    void save_results();
+    void carry_out(Actions& actions);
+    void apply(Actions::Step step);
+    void undo();
+    void redo();
+    Stamp stamp() { return {platform.now(), person, {}}; }
+};
+
+/// Parts of the frame around the rooms. Each draws in its box.
+void draw_header(App::State& state, Actions& actions, Box box);
+void draw_rail(App::State& state, const RoomView& view, Box box);
+void draw_example_bar(App::State& state, Box box);
+void draw_problem_bar(App::State& state, Box box);
+void draw_line_below(App::State& state, const RoomView& view, Actions& actions, Box box);
+void draw_standing(Ui& ui, const RoomView& view, Box box);
+void draw_dialogs(App::State& state);
+
+} // namespace steelyard

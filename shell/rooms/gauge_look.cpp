@@ -1,0 +1,123 @@
+#include "shell/rooms/gauge_look.hpp"
+
+#include "shell/widgets/controls.hpp"
+#include "shell/widgets/panels.hpp"
+#include "shell/widgets/text.hpp"
+#include "shell/words.hpp"
+
+namespace steelyard::gauge {
+namespace {
+
+constexpr float field_height = 32;
+constexpr float label_height = 18;
+constexpr float gap = 8;
+
+} // namespace
+
+ImU32 ink_of(const Theme& theme, Tone tone) {
+    switch (tone) {
+    case Tone::quiet:
+        return theme.quiet;
+    case Tone::open:
+        return theme.brass_ink;
+    case Tone::good:
+        return theme.green;
+    case Tone::bad:
+        return theme.red;
+    case Tone::plain:
+        break;
+    }
+    return theme.ink;
+}
+
+Box Form::place(std::string_view label, int part, int parts) {
+    const float width = (box_.w - gap * static_cast<float>(parts - 1)) / static_cast<float>(parts);
+    const float x = box_.x + (width + gap) * static_cast<float>(part);
+    draw_text(ui_, {x, y_}, label, {.font = Font::small, .ink = ui_.look().quiet, .max_width = width});
+    const Box field{x, y_ + label_height, width, field_height};
+    if (part + 1 == parts)
+        y_ += label_height + field_height + gap;
+    return field;
+}
+
+std::optional<std::string> Form::text(std::string_view id, std::string_view label, std::string_view name,
+                                      const std::string& value, int part, int parts) {
+    const Box field = place(label, part, parts);
+    if (!view_.read_only)
+        return text_field(ui_, id, name, value, field);
+    draw_text(ui_, {field.x, field.y + 6}, value, {.max_width = field.w});
+    return std::nullopt;
+}
+
+std::optional<std::optional<double>> Form::number(std::string_view id, std::string_view label, std::string_view name,
+                                                  std::optional<double> value, int part, int parts) {
+    const auto typed = text(id, label, name, value ? figure_text(*value) : "", part, parts);
+    if (!typed)
+        return std::nullopt;
+    if (typed->find_first_not_of(" \t") == std::string::npos)
+        return std::optional<double>{};
+    const auto number = read_number(*typed);
+    if (!number) {
+        actions_.say("\xE2\x80\x9C" + *typed + "\xE2\x80\x9D is not a number. Type one like 61,500 or 61500 EUR.");
+        return std::nullopt;
+    }
+    return number;
+}
+
+std::optional<std::size_t> Form::pick(std::string_view id, std::string_view label, std::string_view name,
+                                      const std::vector<std::string>& labels, std::size_t chosen, int part,
+                                      int parts) {
+    const Box field = place(label, part, parts);
+    if (!view_.read_only)
+        return drop_down(ui_, id, name, labels, chosen, field);
+    draw_text(ui_, {field.x, field.y + 6}, labels[chosen], {.max_width = field.w});
+    return std::nullopt;
+}
+
+void Form::fact(std::string_view name, std::string_view value, Tone tone) {
+    const float step = line_step(Font::body) + 3;
+    const float width = text_size(Font::body, name).x;
+    const bool one_line = width + 12 + text_size(Font::strong, value).x <= box_.w;
+    draw_text(ui_, {box_.x, y_}, name, {.ink = ui_.look().quiet, .max_width = box_.w});
+    if (!one_line)
+        y_ += step - 3;
+    draw_text(ui_, {box_.x + box_.w, y_}, value,
+              {.font = Font::strong, .ink = ink_of(ui_.look(), tone), .max_width = box_.w, .align = Align::right});
+    y_ += step;
+}
+
+void Form::sentence(std::string_view text, Tone tone) {
+    y_ += draw_paragraph(ui_, {box_.x, y_}, box_.w, text, {.font = Font::small, .ink = ink_of(ui_.look(), tone)}) + 4;
+}
+
+bool Form::link(std::string_view id, std::string_view label) {
+    const Box box{box_.x - 4, y_, std::min(button_width(label, ButtonKind::link), box_.w + 4), 28};
+    y_ += 32;
+    return button(ui_, id, label, box, ButtonKind::link);
+}
+
+bool Form::press(std::string_view id, std::string_view label) {
+    const Box box{box_.x, y_, std::min(button_width(label), box_.w), field_height};
+    y_ += field_height + gap;
+    return button(ui_, id, label, box, ButtonKind::plain, !view_.read_only);
+}
+
+Box card_title(Ui& ui, Box card, std::string_view title, std::optional<std::size_t> mark, bool in_play,
+               std::string_view right) {
+    Box inside = card.inset(16);
+    const Box line = inside.take_top(24, 8);
+    float x = line.x;
+    if (mark) {
+        option_mark(ui, {x, line.y + 1}, *mark, in_play);
+        x += 22 + 8;
+    }
+    float end = line.right();
+    if (!right.empty()) {
+        const auto size = draw_text(ui, {end, line.y + 2}, right, {.font = Font::strong, .align = Align::right});
+        end -= size.x + 12;
+    }
+    draw_text(ui, {x, line.y + 2}, title, {.font = Font::strong, .ink = ui.look().quiet, .max_width = end - x});
+    return inside;
+}
+
+} // namespace steelyard::gauge

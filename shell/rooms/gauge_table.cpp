@@ -1,0 +1,487 @@
+#include "shell/rooms/gauge_table.hpp"
+
+#include <imgui.h>
+
+#include <algorithm>
+#include <array>
+#include <cmath>
+
+#include "core/decision/lookup.hpp"
+#include "shell/rooms/gauge_answers.hpp"
+#include "shell/rooms/gauge_look.hpp"
+#include "shell/widgets/controls.hpp"
+#include "shell/widgets/panels.hpp"
+#include "shell/widgets/text.hpp"
+
+namespace steelyard::gauge {
+namespace {
+
+constexpr float header_height = 44;
+constexpr float section_height = 26;
+constexpr float row_height = 50;
+constexpr float line_more = 15; ///< What a row grows by when a cell of it has a third line.
+constexpr float narrowest_head = 190;
+constexpr float widest_head = 330;
+constexpr float narrowest_column = 124;
+constexpr float padding = 16;
+
+/// A text that is too long for one line, broken between two words.
+std::array<std::string, 2> two_lines(Font font, const std::string& text, float width) {
+    if (text_size(font, text).x <= width)
+        return {text, {}};
+    for (std::size_t space = text.rfind(' '); space != std::string::npos && space > 0; space = text.rfind(' ', space - 1)) {
+        if (text_size(font, std::string_view(text).substr(0, space)).x <= width)
+            return {text.substr(0, space), text.substr(space + 1)};
+    }
+    return {text, {}};
+}
+
+class Table {
+public:
+    Table(Ui& ui, const RoomView& view, Actions& actions, const Model& model, TableState& state)
+        : ui_(ui),
+          view_(view),
+          actions_(actions),
+          model_(model),
+          state_(state),
+          theme_(ui.look()) {}
+
+    void draw(Box box) {
+        const Card card(ui_, box);
+        ScrollArea area(ui_, "gauge-table", box.inset(1));
+        place(area);
+        area.reach(origin_.y + tops_.back());
+        area.reach_right(origin_.x + head_ + column_ * static_cast<float>(columns()));
+        const auto now = chosen(model_, view_.decision, state_);
+        if (now && state_.reveal) {
+            scroll_into_sight(cell_box(*now), head_, header_height);
+            state_.reveal = false;
+        }
+        draw_bands();
+        draw_cells(now);
+        draw_heads();
+        draw_header();
+    }
+
+private:
+    std::size_t columns() const { return view_.decision.options.size(); }
+
+    void place(const ScrollArea& area) {
+        origin_ = area.inner();
+        sight_ = area_in_sight();
+        head_ = std::clamp(0.32F * sight_.w, narrowest_head, widest_head);
+        const float room = (sight_.w - head_) / static_cast<float>(std::max<std::size_t>(columns(), 1));
+        column_ = std::floor(std::max(narrowest_column, room));
+        float y = header_height;
+        for (const auto& row : model_.rows) {
+            tops_.push_back(y);
+            y += row.kind == RowKind::section ? section_height : row_height + (three_lines(row) ? line_more : 0);
+        }
+        tops_.push_back(y);
+    }
+
+    /// The width that texts of a cell may take.
+    float text_width() const { return column_ - 6 - 15; }
+
+    bool three_lines(const Row& row) const {
+        return row.has_ranges || (row.picked() && std::any_of(row.cells.begin(), row.cells.end(), [&](const Cell& cell) {
+                                      return text_size(Font::strong, cell.main.text).x > text_width();
+                                  }));
+    }
+
+    float top(std::size_t row) const { return origin_.y + tops_[row]; }
+    float height(std::size_t row) const { return tops_[row + 1] - tops_[row]; }
+    bool in_sight(std::size_t row) const {
+        return top(row) < sight_.bottom() && top(row) + height(row) > sight_.y + header_height;
+    }
+    Box cell_box(const Chosen& at) const {
+        return {origin_.x + head_ + column_ * static_cast<float>(at.option), top(at.row), column_, height(at.row)};
+    }
+    Box body() const {
+        return {sight_.x + head_, sight_.y + header_height, sight_.w - head_, sight_.h - header_height};
+    }
+
+    static void clip(const Box& box) { ImGui::PushClipRect(box.at(), box.end(), true); }
+
+    void draw_bands() {
+        clip({sight_.x, sight_.y + header_height, sight_.w, sight_.h});
+        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
+            if (!in_sight(r))
+                continue;
+            const float y = top(r);
+            if (model_.rows[r].kind == RowKind::section) {
+                ImGui::GetWindowDrawList()->AddRectFilled({sight_.x, y}, {sight_.right(), y + section_height},
+                                                          theme_.rail);
+                const OnPaper paper(ui_, theme_.rail);
+                draw_text(ui_, {sight_.x + padding, y + (section_height - font_size(Font::strong)) / 2},
+                          model_.rows[r].title,
+                          {.font = Font::strong, .ink = theme_.quiet, .max_width = sight_.w - 2 * padding});
+            } else {
+                rule(ui_, sight_.x, y + height(r) - 1, sight_.w);
+            }
+        }
+        ImGui::PopClipRect();
+    }
+
+    void draw_cells(const std::optional<Chosen>& now) {
+        clip(body());
+        const bool choices_were_asked = state_.open_choices;
+        if (now && state_.editing)
+            draw_editor(*now);
+        else
+            state_.editing = false;
+        if (now && model_.rows[now->row].picked())
+            draw_choices(*now);
+        else if (choices_were_asked)
+            state_.open_choices = false;
+        const GridInput input = grid_input(ui_, "gauge-grid", body(), state_.take_keyboard);
+        state_.take_keyboard = false;
+        const auto under = input.hovered ? at(*input.hovered) : std::nullopt;
+        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
+            if (model_.rows[r].cells.empty() || !in_sight(r))
+                continue;
+            for (std::size_t o = 0; o < columns(); ++o)
+                draw_cell({r, o}, now && now->row == r && now->option == o,
+                          under && under->row == r && under->option == o, input.focused);
+        }
+        act(input, now);
+        ImGui::PopClipRect();
+    }
+
+    void draw_cell(const Chosen& where, bool is_chosen, bool hovered, bool focused) {
+        const Box box = cell_box(where);
+        if (box.right() < sight_.x + head_ || box.x > sight_.right())
+            return;
+        const Row& row = model_.rows[where.row];
+        const Cell& cell = row.cells[where.option];
+        const Option& option = view_.decision.options[where.option];
+        const Box frame{box.x + 3, box.y + 3, box.w - 6, box.h - 7};
+        ImDrawList* list = ImGui::GetWindowDrawList();
+        const ImU32 ground = is_chosen ? theme_.brass_wash : cell.open ? theme_.paper : theme_.card;
+        if (is_chosen || cell.open) {
+            list->AddRectFilled(frame.at(), frame.end(), ground, 5);
+            list->AddRect(frame.at(), frame.end(), theme_.brass, 5, 0, is_chosen ? 2.0F : 1.0F);
+        }
+        if (hovered && !is_chosen)
+            list->AddRectFilled(frame.at(), frame.end(), theme_.hover, 5);
+        if (!(is_chosen && state_.editing))
+            draw_cell_text(frame, row, cell, is_chosen, ground, !model_.columns[where.option].out.empty());
+        if (is_chosen && focused && ui_.keyboard_used)
+            cell_ring(ui_, frame);
+
+        LedgerItem item;
+        item.id = cell_id(row, option.id);
+        item.label = cell_name(row, view_.decision, option.id);
+        item.role = "gridcell";
+        item.value = cell.main.text;
+        for (const std::string* more : {&cell.range, &cell.small.text}) {
+            if (!more->empty())
+                item.value += ", " + *more;
+        }
+        item.at = box.at();
+        item.size = {box.w, box.h};
+        item.enabled = !view_.read_only;
+        item.focused = is_chosen && focused;
+        item.may_scroll = true;
+        ui_.ledger.add(std::move(item));
+    }
+
+    void draw_cell_text(const Box& frame, const Row& row, const Cell& cell, bool is_chosen, ImU32 ground, bool out) {
+        const OnPaper paper(ui_, ground);
+        const float x = frame.x + 9;
+        const float width = text_width();
+        const bool strong = is_chosen || cell.main.tone != Tone::plain;
+        const TextLook main{.font = strong ? Font::strong : Font::body,
+                            .ink = out && cell.main.tone == Tone::plain ? theme_.quiet : ink_of(theme_, cell.main.tone),
+                            .max_width = width};
+        const auto lines = row.picked() ? two_lines(main.font, cell.main.text, width)
+                                        : std::array<std::string, 2>{cell.main.text, {}};
+        const float line = font_size(Font::body);
+        float y = frame.y + (frame.h - line - (lines[1].empty() ? 0 : line - 1) - (cell.range.empty() ? 0 : line_more) -
+                             (cell.small.text.empty() ? 0 : line_more + 1)) / 2;
+        const ImVec2 first = draw_text(ui_, {x, y}, lines[0], main);
+        const TextLook small{.font = Font::small, .ink = theme_.quiet, .max_width = width};
+        if (first.x + 8 + text_size(Font::small, cell.change).x <= width)
+            draw_text(ui_, {x + first.x + 8, y + 3}, cell.change, small);
+        y += line + 1;
+        if (!lines[1].empty()) {
+            draw_text(ui_, {x, y - 2}, lines[1], main);
+            y += line - 1;
+        }
+        if (!cell.range.empty()) {
+            draw_text(ui_, {x, y}, cell.range, small);
+            y += line_more;
+        }
+        draw_text(ui_, {x, y}, cell.small.text,
+                  {.font = Font::small, .ink = ink_of(theme_, cell.small.tone), .max_width = width});
+    }
+
+    void draw_heads() {
+        clip({sight_.x, sight_.y + header_height, head_, sight_.h});
+        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
+            const Row& row = model_.rows[r];
+            if (row.kind == RowKind::section || !in_sight(r))
+                continue;
+            const Box box{sight_.x, top(r), head_, height(r)};
+            if (press_area(ui_, (row.is_must() ? "must-row/" : "row/") + row.id, row.title,
+                           {box.x + 3, box.y + 3, box.w - 6, box.h - 7}, "rowheader", row.detail.text)) {
+                choose_row(model_, view_.decision, state_, row.id, row.is_must());
+            }
+            const float width = box.w - padding - 10;
+            const float y = box.y + (box.h - font_size(Font::body) - 17) / 2;
+            draw_text(ui_, {box.x + padding, y}, row.title, {.max_width = width});
+            draw_text(ui_, {box.x + padding, y + font_size(Font::body) + 1}, row.detail.text,
+                      {.font = Font::small, .ink = ink_of(theme_, row.detail.tone), .max_width = width});
+        }
+        ImGui::PopClipRect();
+    }
+
+    void draw_header() {
+        clip({sight_.x + head_, sight_.y, sight_.w - head_, header_height});
+        for (std::size_t o = 0; o < columns(); ++o) {
+            const Box box{origin_.x + head_ + column_ * static_cast<float>(o), sight_.y, column_, header_height};
+            if (box.right() < sight_.x + head_ || box.x > sight_.right())
+                continue;
+            const std::string& out = model_.columns[o].out;
+            option_mark(ui_, {box.x + 12, box.y + 12}, o, out.empty());
+            const float x = box.x + 12 + 22 + 8;
+            const float width = box.right() - x - 4;
+            const float y = out.empty() ? box.y + 13 : box.y + 6;
+            draw_text(ui_, {x, y}, option_name(view_.decision, view_.decision.options[o].id),
+                      {.font = Font::strong, .ink = out.empty() ? theme_.ink : theme_.quiet, .max_width = width});
+            draw_text(ui_, {x, y + font_size(Font::strong)}, out,
+                      {.font = Font::small, .ink = theme_.quiet, .max_width = width});
+        }
+        ImGui::PopClipRect();
+        rule(ui_, sight_.x, sight_.y + header_height - 1, sight_.w);
+    }
+
+    void draw_editor(const Chosen& now) {
+        const Row& row = model_.rows[now.row];
+        const Box box = cell_box(now);
+        const CellLeft left = cell_editor(ui_, state_.edit, cell_name(row, view_.decision, state_.option),
+                                          {box.x + 3, box.y + 3, box.w - 6, box.h - 7});
+        if (left == CellLeft::not_yet)
+            return;
+        if (left != CellLeft::cancelled) {
+            const auto problem = enter_text(view_, actions_, row, state_.option, state_.edit.text);
+            if (problem) {
+                actions_.say(*problem);
+                // Left by the pointer, it is dropped: the press meant something else.
+                if (left != CellLeft::away) {
+                    state_.edit.wrong = true;
+                    state_.edit.caret_at_end = true;
+                    begin_cell_edit(state_.edit);
+                    return;
+                }
+            }
+        }
+        state_.editing = false;
+        state_.take_keyboard = left != CellLeft::away;
+        if (left == CellLeft::down || left == CellLeft::up)
+            move(now, 0, left == CellLeft::down ? 1 : -1);
+        if (left == CellLeft::right || left == CellLeft::left)
+            move_on(now, left == CellLeft::right ? 1 : -1);
+    }
+
+    void draw_choices(const Chosen& now) {
+        const Row& row = model_.rows[now.row];
+        const Answers answers = answers_of(view_, row, state_.option);
+        const auto picked = cell_choices(ui_, "answers/" + cell_id(row, state_.option), answers.labels,
+                                         answers.standing, cell_box(now), state_.open_choices);
+        if (picked) {
+            enter_answer(view_, actions_, row, state_.option, *picked);
+            state_.take_keyboard = true;
+        }
+    }
+
+    std::optional<Chosen> at(ImVec2 point) const {
+        const float x = point.x - origin_.x - head_;
+        if (x < 0 || columns() == 0)
+            return std::nullopt;
+        const auto option = static_cast<std::size_t>(x / column_);
+        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
+            if (model_.rows[r].cells.empty() || point.y < top(r) || point.y >= top(r) + height(r))
+                continue;
+            return option < columns() ? std::optional<Chosen>({r, option}) : std::nullopt;
+        }
+        return std::nullopt;
+    }
+
+    void act(const GridInput& input, const std::optional<Chosen>& now) {
+        if (input.pressed) {
+            const auto pressed = at(*input.pressed);
+            const auto began = at(input.began);
+            if (pressed && began && pressed->row == began->row && pressed->option == began->option) {
+                const bool again = now && now->row == pressed->row && now->option == pressed->option;
+                choose(*pressed);
+                if (again && !state_.editing)
+                    begin(*pressed, {}, false);
+            }
+            return;
+        }
+        if (!input.focused || state_.editing)
+            return;
+        if (!now) {
+            if (input.right != 0 || input.down != 0 || input.edit)
+                choose_first();
+            return;
+        }
+        if (input.right != 0 || input.down != 0) {
+            move(*now, input.right, input.down);
+        } else if (input.row_start || input.row_end) {
+            choose({now->row, input.row_start ? 0 : columns() - 1});
+        } else if (input.copy) {
+            const Row& row = model_.rows[now->row];
+            actions_.copy(row.typed() ? typed_text(view_, row, state_.option) : row.cells[now->option].main.text);
+        } else if (input.edit) {
+            begin(*now, {}, true);
+        } else if (input.clear && !view_.read_only) {
+            clear_cell(view_, actions_, model_.rows[now->row], state_.option);
+        } else if (!input.typed.empty()) {
+            type(*now, input);
+        }
+    }
+
+    void type(const Chosen& now, const GridInput& input) {
+        const Row& row = model_.rows[now.row];
+        if (row.typed()) {
+            begin(now, input.typed, true);
+            state_.edit.echo = input.echo_due ? input.typed : std::string{};
+        } else if (row.picked() && !view_.read_only && input.typed[0] >= '1' && input.typed[0] <= '9') {
+            const auto answer = static_cast<std::size_t>(input.typed[0] - '1');
+            if (answer + 1 < answers_of(view_, row, state_.option).labels.size())
+                enter_answer(view_, actions_, row, state_.option, answer);
+        }
+    }
+
+    /// Opens a cell: its field, its list of answers, or the place its value comes from. `text`: typed onto it.
+    void begin(const Chosen& now, const std::string& text, bool by_keys) {
+        const Row& row = model_.rows[now.row];
+        if (row.kind == RowKind::pairs) {
+            actions_.go(RoomId::weigh, row.id);
+        } else if (row.kind == RowKind::must_read) {
+            const Requirement* must = find_requirement(view_.decision, row.id);
+            choose_row(model_, view_.decision, state_, must->criterion, false);
+        } else if (view_.read_only) {
+            return;
+        } else if (row.typed()) {
+            state_.editing = true;
+            state_.edit = {};
+            state_.edit.id = "edit/" + cell_id(row, state_.option);
+            state_.edit.text = text.empty() ? typed_text(view_, row, state_.option) : text;
+            state_.edit.caret_at_end = by_keys;
+            begin_cell_edit(state_.edit);
+        } else if (row.picked()) {
+            state_.open_choices = true;
+        }
+    }
+
+    void choose(const Chosen& to) {
+        state_.must = model_.rows[to.row].is_must();
+        state_.row = model_.rows[to.row].id;
+        state_.option = view_.decision.options[to.option].id;
+        state_.reveal = true;
+    }
+
+    void choose_first() {
+        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
+            if (!model_.rows[r].cells.empty()) {
+                choose({r, 0});
+                return;
+            }
+        }
+    }
+
+    /// Goes over section heads; stops at the edges.
+    void move(Chosen from, int right, int down) {
+        const int last = static_cast<int>(columns()) - 1;
+        from.option = static_cast<std::size_t>(std::clamp(static_cast<int>(from.option) + right, 0, last));
+        const int step = down < 0 ? -1 : 1;
+        int row = static_cast<int>(from.row);
+        for (int left = std::abs(down); left > 0; --left) {
+            int next = row + step;
+            while (next >= 0 && next < static_cast<int>(model_.rows.size()) &&
+                   model_.rows[static_cast<std::size_t>(next)].cells.empty())
+                next += step;
+            if (next < 0 || next >= static_cast<int>(model_.rows.size()))
+                break;
+            row = next;
+        }
+        from.row = static_cast<std::size_t>(row);
+        choose(from);
+    }
+
+    /// To the next or the last cell, from the end of a row to the next row.
+    void move_on(const Chosen& from, int step) {
+        const int option = static_cast<int>(from.option) + step;
+        if (option >= 0 && option < static_cast<int>(columns())) {
+            move(from, step, 0);
+        } else {
+            move(from, step > 0 ? -all_columns : all_columns, step);
+        }
+    }
+
+    static constexpr int all_columns = 1 << 20;
+
+    static std::string cell_id(const Row& row, const Id& option) {
+        return (row.is_must() ? "must/" : "cell/") + row.id + "/" + option;
+    }
+
+    Ui& ui_;
+    const RoomView& view_;
+    Actions& actions_;
+    const Model& model_;
+    TableState& state_;
+    const Theme& theme_;
+    Box origin_; ///< Where the table begins, scrolled.
+    Box sight_;
+    float head_ = 0;
+    float column_ = 0;
+    std::vector<float> tops_; ///< Of the rows, and where the last one ends.
+};
+
+} // namespace
+
+std::string cell_name(const Row& row, const Decision& decision, const Id& option) {
+    return row.title + " of " + option_name(decision, option);
+}
+
+std::optional<Chosen> chosen(const Model& model, const Decision& decision, const TableState& state) {
+    const auto row = std::find_if(model.rows.begin(), model.rows.end(), [&](const Row& r) {
+        return !r.cells.empty() && r.is_must() == state.must && r.id == state.row;
+    });
+    const auto option = std::find_if(decision.options.begin(), decision.options.end(),
+                                     [&](const Option& o) { return o.id == state.option; });
+    if (row == model.rows.end() || option == decision.options.end())
+        return std::nullopt;
+    return Chosen{static_cast<std::size_t>(row - model.rows.begin()),
+                  static_cast<std::size_t>(option - decision.options.begin())};
+}
+
+bool choose_row(const Model& model, const Decision& decision, TableState& state, const Id& id, bool must) {
+    const auto row = std::find_if(model.rows.begin(), model.rows.end(), [&](const Row& r) {
+        return !r.cells.empty() && r.is_must() == must && r.id == id;
+    });
+    if (row == model.rows.end())
+        return false;
+    const auto open = std::find_if(row->cells.begin(), row->cells.end(), [](const Cell& cell) { return cell.open; });
+    const bool known = std::any_of(decision.options.begin(), decision.options.end(),
+                                   [&](const Option& o) { return o.id == state.option; });
+    state.must = must;
+    state.row = id;
+    if (open != row->cells.end()) {
+        state.option = decision.options[static_cast<std::size_t>(open - row->cells.begin())].id;
+    } else if (!known) {
+        state.option = decision.options.front().id;
+    }
+    state.take_keyboard = true;
+    state.reveal = true;
+    return true;
+}
+
+void draw_table(Ui& ui, const RoomView& view, Actions& actions, const Model& model, TableState& state, Box box) {
+    Table(ui, view, actions, model, state).draw(box);
+}
+
+} // namespace steelyard::gauge
