@@ -201,6 +201,11 @@ void Program::paste(const std::string& text, double now) {
     }
 }
 
+void Program::flush(double now) {
+    settle(now);
+    app_.flush();
+}
+
 void Program::reduce_motion(bool on) {
     ImGui::GetIO().ConfigInputTextCursorBlink = !on;
 }

@@ -53,6 +53,9 @@ public:
     const std::optional<std::string>& copy(bool cut, double now);
     void paste(const std::string& text, double now);
 
+    /// Stores what is not stored yet, the last key included.
+    void flush(double now);
+
     void reduce_motion(bool on);
 
     App& app() { return app_; }

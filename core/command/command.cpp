@@ -84,7 +84,8 @@ int run_command(int argc, const char* const* argv, std::istream& in, std::ostrea
     try {
         app.parse(argc, argv);
     } catch (const CLI::ParseError& error) {
-        return app.exit(error, out, err) == 0 ? done : wrong_usage;
+        if (app.exit(error, out, err) != 0) return wrong_usage;
+        return out.flush() ? done : cannot_write;
     }
     if (check->parsed()) return check_file(file, in, out, err);
     return solve_file(file, in, out, err);

@@ -4,6 +4,7 @@
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/frame_parts.hpp"
+#include "shell/rooms/growing_card.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 
@@ -39,7 +40,7 @@ public:
         if (!wanted_.empty()) open_item(desk, std::exchange(wanted_, {}));
         ScrollArea scroll(ui, "cards", area);
         const Box in = scroll.inner();
-        scroll.reach(draw_cards(desk, {in.x, in.y, in.w - (in.w < area.w ? 6.0f : 0.0f), in.h}) - gap);
+        scroll.reach(draw_cards(desk, {in.x, in.y, cards_width(area, in), in.h}) - gap);
     }
 
     void show(const Id& id) override { wanted_ = id; }

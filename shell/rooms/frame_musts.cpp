@@ -89,9 +89,9 @@ void kind_part(const Desk& desk, Column& column, const Requirement& must) {
 }
 
 /// One limit in its half of the line. True where it was changed to something a file may hold.
-bool limit_part(const Desk& desk, Column& column, const std::string& id, const char* name,
-                std::optional<double>& limit) {
-    caption(desk, column, name);
+bool limit_part(const Desk& desk, Column& column, const std::string& id, const std::string& name,
+                const std::string& unit, std::optional<double>& limit) {
+    caption(desk, column, unit.empty() ? name : name + ", " + unit);
     const Typed typed = number_field(desk, id, name, limit, column.next(field_height), "no limit");
     if (typed.changed) limit = typed.value;
     return typed.changed;
@@ -101,17 +101,18 @@ void limits_part(const Desk& desk, Column& column, const Requirement& must) {
     Requirement changed = must;
     Column left{column.x, column.y, (column.w - 12) / 2};
     Column right{column.x + left.w + 12, column.y, left.w};
+    const std::string unit = unit_of(desk.decision(), must);
     bool any = false;
     if (kind_of(must) == MustKind::worth) {
         any =
-            limit_part(desk, left, "must-worth/" + must.id, "Worth of at least (0 to 1)", changed.min_worth);
+            limit_part(desk, left, "must-worth/" + must.id, "Worth of at least", "0 to 1", changed.min_worth);
         if (any && changed.min_worth && (*changed.min_worth < 0 || *changed.min_worth > 1)) {
             desk.actions.say("A worth is from 0 to 1; nothing was changed.");
             any = false;
         }
     } else {
-        any = limit_part(desk, left, "must-least/" + must.id, "At least", changed.at_least);
-        any = limit_part(desk, right, "must-most/" + must.id, "At most", changed.at_most) || any;
+        any = limit_part(desk, left, "must-least/" + must.id, "At least", unit, changed.at_least);
+        any = limit_part(desk, right, "must-most/" + must.id, "At most", unit, changed.at_most) || any;
         if (any && changed.at_least && changed.at_most && *changed.at_least > *changed.at_most) {
             desk.actions.say("The lower limit is above the upper one; nothing was changed.");
             any = false;

@@ -1,10 +1,11 @@
 #include <string>
 #include <utility>
+#include <vector>
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/frame_edits.hpp"
 #include "shell/rooms/frame_parts.hpp"
-#include "shell/widgets/icon_button.hpp"
+#include "shell/sentences.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
 
@@ -33,63 +34,12 @@ std::string weight_sentence(const Desk& desk, const Node& node) {
     return {};
 }
 
-void grade_row(const Desk& desk, Column& column, const Node& leaf, std::size_t index) {
-    const Grade& grade = leaf.grades[index];
-    const std::string key = leaf.id + "/" + grade.id;
-    const std::string number = std::to_string(index + 1);
-    Box row = column.next(field_height, 6);
-    const Box remove = row.take_right(30, 4);
-    Node changed = leaf;
-    if (icon_button(desk.ui, "grade-delete/" + key, "Delete grade " + number, remove, Icon::remove,
-                    desk.may_edit())) {
-        changed.grades.erase(changed.grades.begin() + static_cast<std::ptrdiff_t>(index));
-        change(desk, std::move(changed));
-        return;
-    }
-    if (leaf.worths == WorthsBy::given) {
-        const Box worth = row.take_right(86, 8);
-        const Typed typed =
-            number_field(desk, "grade-worth/" + key, "Worth of grade " + number, grade.worth, worth, "worth");
-        if (typed.changed && typed.value && (*typed.value < 0 || *typed.value > 1)) {
-            desk.actions.say("A worth is from 0 to 1; nothing was changed.");
-        } else if (typed.changed) {
-            changed.grades[index].worth = typed.value;
-            change(desk, changed);
-        }
-    }
-    if (auto name =
-            line_field(desk, "grade-name/" + key, "Name of grade " + number, grade.name, row, "Name")) {
-        changed = leaf;
-        changed.grades[index].name = std::move(*name);
-        change(desk, std::move(changed));
-    }
-}
-
 void grades_part(const Desk& desk, Column& column, const Node& leaf) {
-    caption(desk, column,
-            leaf.worths == WorthsBy::given ? "Grades, and what each is worth from 0 to 1" : "Grades");
-    for (std::size_t i = 0; i < leaf.grades.size(); ++i) grade_row(desk, column, leaf, i);
-    {
-        ButtonRow row(desk, column);
-        if (row.button("grade-add/" + leaf.id, "Add grade")) {
-            Node changed = leaf;
-            Grade grade;
-            grade.id = fresh_id("grade", [&](const Id& id) { return find_grade(leaf, id) != nullptr; });
-            grade.name = "New grade";
-            desk.ui.focus_next = "grade-name/" + leaf.id + "/" + grade.id;
-            changed.grades.push_back(std::move(grade));
-            change(desk, std::move(changed));
-        }
-    }
-    caption(desk, column, "Where the worth of a grade comes from");
-    const auto worths =
-        pick(desk, "node-worths/" + leaf.id, "Worth of the grades", {"Given here", "Compared in pairs"},
-             static_cast<std::size_t>(leaf.worths), column.next(button_height));
-    if (worths) {
-        Node changed = leaf;
-        changed.worths = static_cast<WorthsBy>(*worths);
-        change(desk, std::move(changed));
-    }
+    std::vector<std::string> names;
+    for (const auto& grade : leaf.grades) names.push_back(grade.name.empty() ? grade.id : grade.name);
+    remark(desk, column,
+           names.empty() ? "No grades yet: they are made in Gauge."
+                         : "The grades: " + listed(names, 6) + ". Named, and given their worth, in Gauge.");
 }
 
 void figure_part(const Desk& desk, Column& column, const Node& leaf) {
@@ -108,9 +58,9 @@ void figure_part(const Desk& desk, Column& column, const Node& leaf) {
 
 void leaf_part(const Desk& desk, Column& column, const Node& leaf) {
     caption(desk, column, "How the options are rated on it");
-    const auto rate = pick(desk, "node-rate/" + leaf.id, "How the options are rated",
-                           {"Compared in pairs", "Figures", "Grades"}, static_cast<std::size_t>(leaf.rate),
-                           column.next(button_height));
+    const auto rate =
+        pick(desk, "node-rate/" + leaf.id, "How the options are rated", {"In pairs", "Figures", "Grades"},
+             static_cast<std::size_t>(leaf.rate), column.next(button_height));
     if (rate) change(desk, rated_by(leaf, static_cast<RateBy>(*rate)));
     if (leaf.rate == RateBy::figure) figure_part(desk, column, leaf);
     if (leaf.rate == RateBy::grade) grades_part(desk, column, leaf);
@@ -118,9 +68,9 @@ void leaf_part(const Desk& desk, Column& column, const Node& leaf) {
 
 void group_part(const Desk& desk, Column& column, const Node& group) {
     caption(desk, column, "How what is in it is weighed");
-    const auto weights = pick(desk, "node-weights/" + group.id, "How its criteria are weighed",
-                              {"Compared in pairs", "Points shared out"},
-                              static_cast<std::size_t>(group.weights), column.next(button_height));
+    const auto weights =
+        pick(desk, "node-weights/" + group.id, "How its criteria are weighed", {"In pairs", "By points"},
+             static_cast<std::size_t>(group.weights), column.next(button_height));
     if (!weights) return;
     Node changed = group;
     changed.weights = static_cast<WeightsBy>(*weights);

@@ -17,8 +17,9 @@ Box Column::next(float height, float gap) {
 }
 
 void caption(const Desk& desk, Column& column, std::string_view text) {
-    const Box box = column.next(line_step(Font::small), 2);
-    draw_text(desk.ui, box.at(), text, {.font = Font::small, .ink = desk.look().quiet, .max_width = box.w});
+    column.y += draw_paragraph(desk.ui, {column.x, column.y}, column.w, text,
+                               {.font = Font::small, .ink = desk.look().quiet}) +
+                2;
 }
 
 void remark(const Desk& desk, Column& column, std::string_view text, ImU32 ink) {

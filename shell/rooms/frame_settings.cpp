@@ -1,3 +1,4 @@
+#include <algorithm>
 #include <string>
 #include <utility>
 
@@ -27,13 +28,14 @@ std::size_t index_of(Enum value) {
 }
 
 std::string summary(const Decision& d) {
+    static constexpr std::string_view methods[]{"eigenvector", "geometric mean", "column average"};
     const Settings& s = d.settings;
     std::string text = synthesis_words[index_of(s.synthesis)];
-    text += s.synthesis == Synthesis::ideal ? " (ideal)" : " (distributive)";
-    text += "; weights from pairs: " + method_words[index_of(s.method)];
-    text += "; consistency ratio up to " + figure_text(s.limit);
-    text += s.money.empty() ? "; differences not told in money" : "; money is " + node_name(d, s.money);
-    return text + ".";
+    text += s.synthesis == Synthesis::ideal ? " (ideal). " : " (distributive). ";
+    text += "Weights by " + std::string(methods[index_of(s.method)]) + ". ";
+    text += "Consistency ratio up to " + figure_text(s.limit) + ". ";
+    return text + (s.money.empty() ? "Differences are not told in money."
+                                   : "Differences in money by " + node_name(d, s.money) + ".");
 }
 
 void scores_part(const Desk& desk, Column& column, Settings& s) {
@@ -64,27 +66,36 @@ void pairs_part(const Desk& desk, Column& column, Settings& s) {
                : "Each judge's answers are weighed on their own, then the weights are combined.");
 }
 
+/// A number at the right of what it means. Emptied, it is `otherwise`.
+std::optional<double> number_row(const Desk& desk, Column& column, std::string_view id, std::string_view name,
+                                 std::string_view meaning, double value, double otherwise) {
+    constexpr float field_width = 86;
+    const float width = column.w - field_width - 12;
+    const float text = paragraph_height(width, meaning, Font::small);
+    const Box row = column.next(std::max(field_height, text));
+    draw_paragraph(desk.ui, {row.x, row.y + (row.h - text) / 2}, width, meaning,
+                   {.font = Font::small, .ink = desk.look().quiet});
+    const Typed typed =
+        number_field(desk, id, name, value, {row.right() - field_width, row.y, field_width, field_height});
+    return typed.changed ? std::optional(typed.value.value_or(otherwise)) : std::nullopt;
+}
+
+double refuse(const Desk& desk, const char* why, double unchanged) {
+    desk.actions.say(why);
+    return unchanged;
+}
+
 void consistency_part(const Desk& desk, Column& column, Settings& s) {
-    Column left{column.x, column.y, (column.w - 12) / 2};
-    Column right{column.x + left.w + 12, column.y, left.w};
-    caption(desk, left, "Answers hold together up to");
-    const Typed limit = number_field(desk, "set-limit", "Limit of the consistency ratio", s.limit,
-                                     left.next(field_height), "0.1");
-    if (limit.changed && limit.value.value_or(0.1) > 0)
-        s.limit = limit.value.value_or(0.1);
-    else if (limit.changed)
-        desk.actions.say("The limit is above 0; nothing was changed.");
-    caption(desk, right, "Too close: a lead up to");
-    const Typed close = number_field(desk, "set-close", "Lead that is too close, in points",
-                                     100 * s.too_close, right.next(field_height), "0");
-    if (close.changed && close.value.value_or(0) >= 0)
-        s.too_close = close.value.value_or(0) / 100;
-    else if (close.changed)
-        desk.actions.say("A lead is 0 points or more; nothing was changed.");
-    column.y = left.y;
-    remark(desk, column,
-           "Left: consistency ratio (CR), 0.1 by common practice. Right: points of 100; with a smaller lead "
-           "first place is called undecided.");
+    if (const auto limit =
+            number_row(desk, column, "set-limit", "Limit of the consistency ratio",
+                       "Answers of a set hold together up to a consistency ratio (CR) of", s.limit, 0.1))
+        s.limit = *limit > 0 ? *limit : refuse(desk, "The limit is above 0; nothing was changed.", s.limit);
+    if (const auto close = number_row(desk, column, "set-close", "Lead that is too close, in points",
+                                      "First place is called undecided at a lead, in points of 100, of",
+                                      100 * s.too_close, 0))
+        s.too_close = *close >= 0
+                          ? *close / 100
+                          : refuse(desk, "A lead is 0 points or more; nothing was changed.", s.too_close);
     caption(desk, column, "What random answers would give, to compare with (random index)");
     if (const auto now = pick_from_list(desk, "set-table", "Random index table", table_words,
                                         index_of(s.random_index), column.next(field_height)))

@@ -6,7 +6,7 @@
 #include "shell/rooms/gauge_entries.hpp"
 #include "shell/rooms/gauge_look.hpp"
 #include "shell/rooms/gauge_plot.hpp"
-#include "shell/widgets/controls.hpp"
+#include "shell/widgets/icon_button.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
@@ -212,8 +212,8 @@ private:
             const auto y = second.number(id + "/y", {}, name(("Worth of " + which).c_str()), at[i][1]);
             changed = changed || (x && *x) || (y && *y);
             at[i] = {x ? x->value_or(at[i][0]) : at[i][0], y ? y->value_or(at[i][1]) : at[i][1]};
-            if (button(ui_, id + "/remove", "\xC3\x97", {line.x + 2 * width + 16, line.y + 4, 24, 24},
-                       ButtonKind::quiet, !view_.read_only && at.size() > 1))
+            if (icon_button(ui_, id + "/remove", "Remove " + which, {line.x + 2 * width + 16, line.y + 4, 24, 24},
+                            Icon::remove, !view_.read_only && at.size() > 1))
                 removed = i;
             form.space(36);
         }

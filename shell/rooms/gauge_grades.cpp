@@ -5,6 +5,7 @@
 #include "shell/rooms/gauge_entries.hpp"
 #include "shell/rooms/gauge_look.hpp"
 #include "shell/widgets/controls.hpp"
+#include "shell/widgets/icon_button.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
@@ -112,8 +113,8 @@ private:
             place.take_left(mark_size, 3);
         }
         draw_worth(i, shown, worth);
-        if (button(ui_, "grade-remove/" + grade.id, "\xC3\x97", {remove.x, remove.y + 4, 24, 24}, ButtonKind::quiet,
-                   !view_.read_only)) {
+        if (icon_button(ui_, "grade-remove/" + grade.id, "Remove grade " + shown, {remove.x, remove.y + 4, 24, 24},
+                        Icon::remove, !view_.read_only)) {
             Node node = leaf_;
             node.grades.erase(node.grades.begin() + static_cast<std::ptrdiff_t>(i));
             change(std::move(node));

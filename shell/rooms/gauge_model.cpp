@@ -270,12 +270,7 @@ private:
                    : !must.node.empty()      ? RowKind::must_node
                                              : RowKind::must_limit;
         const std::string limit = must.yes_no ? "yes or no" : limit_words(must);
-        std::string from;
-        if (!must.criterion.empty())
-            from = "figure of " + node_name(d_, must.criterion);
-        if (!must.node.empty())
-            from = "worth of " + node_name(d_, must.node);
-        row.detail = {joined({must.safety ? "safety" : "", must.unit, limit.empty() ? "no limit yet" : limit, from}),
+        row.detail = {joined({must.unit, limit.empty() ? "no limit yet" : limit, must.safety ? "safety" : ""}),
                       limit.empty() ? Tone::open : Tone::quiet};
         for (const auto& option : d_.options)
             row.cells.push_back(must_cell(must, option, row.kind));

@@ -73,12 +73,16 @@ private:
     }
     float y_of(double worth) const { return axis_ - static_cast<float>(std::clamp(worth, 0.0, 1.0)) * (axis_ - top_); }
 
+    ImU32 colour_of(const PlotMark& mark) const {
+        return mark.in_play ? option_colour(ui_.look(), mark.index) : ui_.look().quiet;
+    }
+
     /// The range of the chosen option, as a band.
     void draw_range() {
         for (const auto& mark : plot_.marks) {
             if (!mark.chosen || (!mark.low && !mark.high))
                 continue;
-            const ImU32 colour = option_colour(ui_.look(), mark.index);
+            const ImU32 colour = colour_of(mark);
             list_.AddRectFilled({x_of(mark.low.value_or(mark.figure)), top_},
                                 {x_of(mark.high.value_or(mark.figure)), axis_}, faded(colour, 36));
         }
@@ -121,7 +125,7 @@ private:
         const auto places = spread(middles, mark_size + 2, box_.x, box_.right());
         for (std::size_t k = 0; k < order.size(); ++k) {
             const PlotMark& mark = plot_.marks[order[k]];
-            const ImU32 colour = mark.in_play ? option_colour(ui_.look(), mark.index) : ui_.look().quiet;
+            const ImU32 colour = colour_of(mark);
             const float x = middles[k];
             const auto worth = plot_.worth ? plot_.worth(mark.figure) : std::nullopt;
             if (worth) {

@@ -69,7 +69,7 @@ private:
     void place(const ScrollArea& area) {
         origin_ = area.inner();
         sight_ = area_in_sight();
-        head_ = std::clamp(0.32F * sight_.w, narrowest_head, widest_head);
+        head_ = std::floor(std::clamp(0.3F * sight_.w, narrowest_head, widest_head));
         const float room = (sight_.w - head_) / static_cast<float>(std::max<std::size_t>(columns(), 1));
         column_ = std::floor(std::max(narrowest_column, room));
         float y = header_height;
@@ -81,12 +81,15 @@ private:
     }
 
     /// The width that texts of a cell may take.
-    float text_width() const { return column_ - 6 - 15; }
+    float text_width() const { return column_ - 6 - 11; }
+
+    float head_text_width() const { return head_ - padding - 10; }
 
     bool three_lines(const Row& row) const {
-        return row.has_ranges || (row.picked() && std::any_of(row.cells.begin(), row.cells.end(), [&](const Cell& cell) {
-                                      return text_size(Font::strong, cell.main.text).x > text_width();
-                                  }));
+        const bool long_answer = row.picked() && std::any_of(row.cells.begin(), row.cells.end(), [&](const Cell& cell) {
+                                     return text_size(Font::strong, cell.main.text).x > text_width();
+                                 });
+        return row.has_ranges || long_answer || text_size(Font::body, row.title).x > head_text_width();
     }
 
     float top(std::size_t row) const { return origin_.y + tops_[row]; }
@@ -174,7 +177,7 @@ private:
         item.label = cell_name(row, view_.decision, option.id);
         item.role = "gridcell";
         item.value = cell.main.text;
-        for (const std::string* more : {&cell.range, &cell.small.text}) {
+        for (const std::string* more : {&cell.change, &cell.range, &cell.small.text}) {
             if (!more->empty())
                 item.value += ", " + *more;
         }
@@ -188,7 +191,7 @@ private:
 
     void draw_cell_text(const Box& frame, const Row& row, const Cell& cell, bool is_chosen, ImU32 ground, bool out) {
         const OnPaper paper(ui_, ground);
-        const float x = frame.x + 9;
+        const float x = frame.x + 8;
         const float width = text_width();
         const bool strong = is_chosen || cell.main.tone != Tone::plain;
         const TextLook main{.font = strong ? Font::strong : Font::body,
@@ -227,10 +230,15 @@ private:
                            {box.x + 3, box.y + 3, box.w - 6, box.h - 7}, "rowheader", row.detail.text)) {
                 choose_row(model_, view_.decision, state_, row.id, row.is_must());
             }
-            const float width = box.w - padding - 10;
-            const float y = box.y + (box.h - font_size(Font::body) - 17) / 2;
-            draw_text(ui_, {box.x + padding, y}, row.title, {.max_width = width});
-            draw_text(ui_, {box.x + padding, y + font_size(Font::body) + 1}, row.detail.text,
+            const float width = head_text_width();
+            const float line = font_size(Font::body);
+            const auto lines = two_lines(Font::body, row.title, width);
+            float y = box.y + (box.h - line - line_more - (lines[1].empty() ? 0 : line)) / 2 - 1;
+            for (const auto& text : lines) {
+                draw_text(ui_, {box.x + padding, y}, text, {.max_width = width});
+                y += text.empty() ? 0 : line;
+            }
+            draw_text(ui_, {box.x + padding, y + 1}, row.detail.text,
                       {.font = Font::small, .ink = ink_of(theme_, row.detail.tone), .max_width = width});
         }
         ImGui::PopClipRect();

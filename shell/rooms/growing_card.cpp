@@ -39,4 +39,9 @@ float GrowingCard::end(float content_bottom) {
     return bottom_;
 }
 
+float cards_width(const Box& area, const Box& scrolled) {
+    constexpr float beside_bar = 8;
+    return scrolled.w < area.w ? scrolled.w - beside_bar : scrolled.w;
+}
+
 } // namespace steelyard

@@ -38,4 +38,7 @@ private:
     OnPaper paper_;
 };
 
+/// The width for cards in a scrolled room: a little less than there is where a scroll bar stands beside them.
+float cards_width(const Box& area, const Box& scrolled);
+
 } // namespace steelyard

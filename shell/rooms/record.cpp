@@ -11,7 +11,6 @@
 namespace steelyard {
 namespace {
 
-constexpr float margin = 18;
 constexpr float gap = 12;
 /// From this width on, the log stands beside the rest.
 constexpr float two_columns = 820;
@@ -52,8 +51,8 @@ public:
     void draw(Ui& ui, const RoomView& view, Actions& actions, Box area) override {
         ScrollArea scroll(ui, "record", area);
         const Box inner = scroll.inner();
-        const ImVec2 at{inner.x + margin, inner.y + margin};
-        const float width = inner.w - 2 * margin;
+        const ImVec2 at = inner.at();
+        const float width = cards_width(area, inner);
         const float top =
             at.y + draw_paragraph(ui, at, width, "Decide, sign, send", {.font = Font::large}) + gap;
         const bool beside = width >= two_columns;
@@ -63,7 +62,7 @@ public:
         const float log_x = beside ? at.x + left_width + gap : at.x;
         const float log_y = beside ? top : left + gap;
         const float log = draw_log(ui, view, {log_x, log_y}, beside ? width - left_width - gap : width);
-        scroll.reach(std::max(left, log) + margin);
+        scroll.reach(std::max(left, log));
     }
 
     void reset() override { shown_ = log_step; }

@@ -1,5 +1,6 @@
 #include <algorithm>
 
+#include "shell/rooms/growing_card.hpp"
 #include "shell/rooms/room.hpp"
 #include "shell/rooms/standing_bars.hpp"
 #include "shell/rooms/standing_lists.hpp"
@@ -12,7 +13,6 @@
 namespace steelyard {
 namespace {
 
-constexpr float margin = 18;
 constexpr float gap = 12;
 /// From this width on, the pair and the lists stand side by side.
 constexpr float two_columns = 760;
@@ -32,8 +32,8 @@ public:
     void draw(Ui& ui, const RoomView& view, Actions& actions, Box area) override {
         ScrollArea scroll(ui, "standing", area);
         const Box inner = scroll.inner();
-        const ImVec2 at{inner.x + margin, inner.y + margin};
-        const float width = inner.w - 2 * margin;
+        const ImVec2 at = inner.at();
+        const float width = cards_width(area, inner);
         if (!wanted_.empty()) bars_.open(wanted_, view);
         wanted_.clear();
 
@@ -51,7 +51,7 @@ public:
                  "Ranks preferences on the figures given; certifies nothing. What must be met for safety "
                  "is decided by licensed people under local codes.",
                  {.font = Font::small, .ink = ui.look().quiet});
-        scroll.reach(y + margin);
+        scroll.reach(y);
     }
 
     void show(const Id& id) override { wanted_ = id; }

@@ -1,3 +1,5 @@
+#include <algorithm>
+
 #include "shell/rooms/growing_card.hpp"
 #include "shell/rooms/room.hpp"
 #include "shell/rooms/told_ahead.hpp"
@@ -8,7 +10,6 @@
 namespace steelyard {
 namespace {
 
-constexpr float margin = 18;
 constexpr float widest = 820;
 
 const Told will_hold{
@@ -27,8 +28,8 @@ public:
     void draw(Ui& ui, const RoomView&, Actions& actions, Box area) override {
         ScrollArea scroll(ui, "tipping", area);
         const Box inner = scroll.inner();
-        const ImVec2 at{inner.x + margin, inner.y + margin};
-        const float width = std::min(inner.w - 2 * margin, widest);
+        const ImVec2 at = inner.at();
+        const float width = std::min(cards_width(area, inner), widest);
         float y =
             at.y + draw_paragraph(ui, at, width, "What would change first place", {.font = Font::large}) + 12;
         {
@@ -53,7 +54,7 @@ public:
             if (button(ui, "tipping/weigh", "Go to Weigh", weigh)) actions.go(RoomId::weigh);
             y = card.end(y + 32);
         }
-        scroll.reach(y + margin);
+        scroll.reach(y);
     }
 };
 

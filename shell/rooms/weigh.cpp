@@ -188,13 +188,20 @@ private:
         inside.take_top(20);
 
         Box foot = inside.take_bottom(32);
-        ArmState state{{item_name(view.decision, set_, pair_[0]),
-                        range_at_stake(view.decision, view.results, set_, pair_[0])},
-                       {item_name(view.decision, set_, pair_[1]),
-                        range_at_stake(view.decision, view.results, set_, pair_[1])},
-                       own,
-                       implied_ratio(entry, pair_[0], pair_[1]),
-                       !view.read_only};
+        const auto load = [&](const Id& item) {
+            return Load{item_name(view.decision, set_, item),
+                        range_at_stake(view.decision, view.results, set_, item)};
+        };
+        ArmState state{load(pair_[0]),      load(pair_[1]), own, implied_ratio(entry, pair_[0], pair_[1]),
+                       "the other answers", !view.read_only};
+        if (!own && agreed) {
+            state.other = agreed;
+            state.other_name = "agreed in the room";
+        } else if (const auto mean = group_ratio(entry, pair_[0], pair_[1]);
+                   !own && entry.by.empty() && mean) {
+            state.other = mean;
+            state.other_name = "the judges together";
+        }
         if (fresh_) {
             ui.focus_next = "arm";
             fresh_ = false;

@@ -107,9 +107,9 @@ std::optional<ItemPair> draw_grid(Ui& ui, const RoomView& view, const SetResult&
     ScrollArea area(ui, "grid", inside);
     const Box in = area.inner();
     const std::size_t n = entry.items.size();
-    const float names = std::clamp(in.w * 0.3f, 80.0f, 130.0f);
-    const float cell =
-        std::clamp((in.w - names - 6) / static_cast<float>(std::max<std::size_t>(n - 1, 1)), 50.0f, 76.0f);
+    const auto columns = static_cast<float>(std::max<std::size_t>(n - 1, 1));
+    const float names = std::clamp(in.w - 58 * columns, 84.0f, 160.0f);
+    const float cell = std::clamp((in.w - names - 4) / columns, 50.0f, 76.0f);
     for (std::size_t j = 1; j < n; ++j) {
         const float x = in.x + names + cell * static_cast<float>(j - 1);
         draw_text(ui, {x + cell / 2, in.y}, item_name(view.decision, entry.set, entry.items[j]),
@@ -138,13 +138,8 @@ std::optional<ItemPair> draw_grid(Ui& ui, const RoomView& view, const SetResult&
             // A mean of several judges has no single answer behind it: what the group's matrix holds is
             // shown.
             std::string text = "\xE2\x80\x94";
-            if (said) {
-                text = ratio_text(*said);
-            } else if (!missing) {
-                for (const auto& m : entry.misfits) {
-                    if (m.a == pair[0] && m.b == pair[1]) text = ratio_text(m.given);
-                }
-            }
+            if (const auto shown = said ? said : group_ratio(entry, pair[0], pair[1]))
+                text = ratio_text(*shown);
             const std::string label = item_name(view.decision, entry.set, pair[0]) + " against " +
                                       item_name(view.decision, entry.set, pair[1]);
             const OnPaper paper(ui, ground);

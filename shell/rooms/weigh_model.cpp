@@ -80,6 +80,14 @@ std::optional<double> said_ratio(const Decision& decision, const Id& set, const 
     return std::nullopt;
 }
 
+std::optional<double> group_ratio(const SetResult& entry, const Id& a, const Id& b) {
+    for (const auto& misfit : entry.misfits) {
+        if (misfit.a == a && misfit.b == b) return misfit.given;
+        if (misfit.a == b && misfit.b == a) return 1 / misfit.given;
+    }
+    return std::nullopt;
+}
+
 std::optional<double> implied_ratio(const SetResult& entry, const Id& a, const Id& b) {
     for (const auto& misfit : entry.misfits) {
         if (misfit.a == a && misfit.b == b) return misfit.implied;

@@ -17,6 +17,9 @@ const SetResult* group_entry(const Results& results, const Id& set);
 std::optional<double> said_ratio(const Decision& decision, const Id& set, const Id& by, const Id& a,
                                  const Id& b);
 
+/// The ratio that stands in an entry's matrix for a judged pair: one person's, the agreed one, or a mean.
+std::optional<double> group_ratio(const SetResult& entry, const Id& a, const Id& b);
+
 /// What the other answers of an entry say of a pair.
 std::optional<double> implied_ratio(const SetResult& entry, const Id& a, const Id& b);
 

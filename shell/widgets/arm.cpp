@@ -210,13 +210,14 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
     list->AddCircleFilled(beam.pivot, 8, theme.card);
     list->AddCircle(beam.pivot, 8, theme.steel, 0, 3);
 
-    if (state.implied) {
-        const double p = position_of(*state.implied);
-        const bool apart = !shown || std::abs(p - position) > 0.06;
-        if (apart) {
+    if (state.other) {
+        const double p = position_of(*state.other);
+        if (!shown || std::abs(p - position) > 0.06) {
             draw_poise(ui, beam, p, false);
-            const ImVec2 at = beam.at(p, 5);
-            draw_text(ui, {at.x, at.y - 56}, "the other answers",
+            // Clear of the poise's own number where the two stand close.
+            const float lift = shown && std::abs(p - position) < 0.3 ? 76.0f : 56.0f;
+            const ImVec2 top = beam.at(p, 5);
+            draw_text(ui, {top.x, top.y - lift}, state.other_name,
                       {.font = Font::small, .ink = theme.brass_ink, .align = Align::centre});
         }
     }
@@ -225,7 +226,7 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
         draw_poise(ui, beam, position, true);
         const std::string times = "\xC3\x97" + ratio_text(*shown >= 1 ? *shown : 1 / *shown);
         draw_text(ui, {at.x, at.y - 58}, times, {.font = Font::strong, .align = Align::centre});
-    } else {
+    } else if (!state.other) {
         draw_poise(ui, beam, 0, false);
         draw_text(ui, {at.x, at.y - 58}, "not judged",
                   {.font = Font::small, .ink = theme.brass_ink, .align = Align::centre});

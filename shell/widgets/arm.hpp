@@ -18,8 +18,10 @@ struct Load {
 struct ArmState {
     Load left;
     Load right;
-    std::optional<double> ratio;   ///< None: not judged yet.
-    std::optional<double> implied; ///< What the other answers say, drawn as an empty poise.
+    std::optional<double> ratio; ///< None: not judged yet.
+    std::optional<double>
+        other;              ///< Drawn as an empty poise: what the other answers say, or a mean of several.
+    std::string other_name; ///< What the empty poise is: "the other answers".
     bool enabled = true;
 };
 

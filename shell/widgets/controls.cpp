@@ -92,11 +92,11 @@ std::optional<std::string> edit_text(Ui& ui, std::string_view id, std::string_vi
     const ImGuiInputTextFlags flags =
         ImGuiInputTextFlags_CallbackResize | (lines ? 0 : ImGuiInputTextFlags_AutoSelectAll);
     if (lines) {
-        ImGui::InputTextMultiline("text", text.data(), text.capacity() + 1, {box.w, box.h}, flags, grow,
+        ImGui::InputTextMultiline("##text", text.data(), text.capacity() + 1, {box.w, box.h}, flags, grow,
                                   &text);
     } else {
         ImGui::SetNextItemWidth(box.w);
-        ImGui::InputText("text", text.data(), text.capacity() + 1, flags, grow, &text);
+        ImGui::InputText("##text", text.data(), text.capacity() + 1, flags, grow, &text);
     }
     ImGui::PopStyleVar();
     ImGui::PopFont();

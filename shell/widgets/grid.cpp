@@ -14,8 +14,12 @@ namespace {
 constexpr int page_of_cells = 8;
 constexpr int all_cells = 100000;
 
-bool pressed_again(ImGuiKey key) { return ImGui::IsKeyPressed(key, true); }
-bool pressed_once(ImGuiKey key) { return ImGui::IsKeyPressed(key, false); }
+bool pressed_again(ImGuiKey key) {
+    return ImGui::IsKeyPressed(key, true);
+}
+bool pressed_once(ImGuiKey key) {
+    return ImGui::IsKeyPressed(key, false);
+}
 
 /// The sign of a number that a key stands for.
 char sign_pressed() {
@@ -24,10 +28,8 @@ char sign_pressed() {
             pressed_once(static_cast<ImGuiKey>(ImGuiKey_Keypad0 + i)))
             return static_cast<char>('0' + i);
     }
-    if (pressed_once(ImGuiKey_Minus) || pressed_once(ImGuiKey_KeypadSubtract))
-        return '-';
-    if (pressed_once(ImGuiKey_Period) || pressed_once(ImGuiKey_KeypadDecimal))
-        return '.';
+    if (pressed_once(ImGuiKey_Minus) || pressed_once(ImGuiKey_KeypadSubtract)) return '-';
+    if (pressed_once(ImGuiKey_Period) || pressed_once(ImGuiKey_KeypadDecimal)) return '.';
     return pressed_once(ImGuiKey_Comma) ? ',' : '\0';
 }
 
@@ -37,43 +39,39 @@ std::string take_typed_text() {
     for (const ImWchar c : ImGui::GetIO().InputQueueCharacters) {
         std::array<char, 5> utf8{};
         ImTextCharToUtf8(utf8.data(), c);
-        if (c >= 0x20 && c != 0x7f)
-            text += utf8.data();
+        if (c >= 0x20 && c != 0x7f) text += utf8.data();
     }
     ImGui::GetIO().InputQueueCharacters.resize(0);
     return text;
 }
 
-/// The browser may deliver the sign whose key opened the cell as text too, once the field has the keyboard. It is dropped
-/// unless another key was pressed since.
+/// The browser may deliver the sign whose key opened the cell as text too, once the field has the keyboard.
+/// It is dropped unless another key was pressed since.
 void drop_echo(CellEdit& edit) {
-    if (edit.echo.empty())
-        return;
+    if (edit.echo.empty()) return;
     auto& queue = ImGui::GetIO().InputQueueCharacters;
     if (sign_pressed() != '\0') {
         edit.echo.clear();
     } else if (!queue.empty()) {
-        if (queue[0] == static_cast<ImWchar>(edit.echo[0]))
-            queue.erase(queue.begin());
+        if (queue[0] == static_cast<ImWchar>(edit.echo[0])) queue.erase(queue.begin());
         edit.echo.clear();
     }
 }
 
 void read_keys(GridInput& input, ImGuiID id) {
-    static constexpr std::array keys{
-        ImGuiKey_LeftArrow, ImGuiKey_RightArrow, ImGuiKey_UpArrow, ImGuiKey_DownArrow, ImGuiKey_Home,
-        ImGuiKey_End,       ImGuiKey_PageUp,     ImGuiKey_PageDown};
+    static constexpr std::array keys{ImGuiKey_LeftArrow, ImGuiKey_RightArrow, ImGuiKey_UpArrow,
+                                     ImGuiKey_DownArrow, ImGuiKey_Home,       ImGuiKey_End,
+                                     ImGuiKey_PageUp,    ImGuiKey_PageDown};
     // Owned from frame to frame, or ImGui would move its own focus as well.
-    for (const ImGuiKey key : keys)
-        ImGui::SetKeyOwner(key, id);
+    for (const ImGuiKey key : keys) ImGui::SetKeyOwner(key, id);
     const ImGuiIO& io = ImGui::GetIO();
     input.copy = (io.ConfigMacOSXBehaviors ? io.KeySuper : io.KeyCtrl) && pressed_once(ImGuiKey_C);
-    if (io.KeyAlt || io.KeySuper)
-        return;
+    if (io.KeyAlt || io.KeySuper) return;
     if (!io.KeyCtrl) {
         input.right = int(pressed_again(ImGuiKey_RightArrow)) - int(pressed_again(ImGuiKey_LeftArrow));
         input.down = int(pressed_again(ImGuiKey_DownArrow)) - int(pressed_again(ImGuiKey_UpArrow));
-        input.down += page_of_cells * (int(pressed_again(ImGuiKey_PageDown)) - int(pressed_again(ImGuiKey_PageUp)));
+        input.down +=
+            page_of_cells * (int(pressed_again(ImGuiKey_PageDown)) - int(pressed_again(ImGuiKey_PageUp)));
     }
     input.row_start = pressed_once(ImGuiKey_Home);
     input.row_end = pressed_once(ImGuiKey_End);
@@ -82,10 +80,9 @@ void read_keys(GridInput& input, ImGuiID id) {
         return;
     }
     input.clear = pressed_once(ImGuiKey_Delete) || pressed_once(ImGuiKey_Backspace);
-    input.edit = pressed_once(ImGuiKey_F2) || pressed_once(ImGuiKey_Enter) || pressed_once(ImGuiKey_KeypadEnter) ||
-                 pressed_once(ImGuiKey_Space);
-    if (input.edit || input.clear)
-        return;
+    input.edit = pressed_once(ImGuiKey_F2) || pressed_once(ImGuiKey_Enter) ||
+                 pressed_once(ImGuiKey_KeypadEnter) || pressed_once(ImGuiKey_Space);
+    if (input.edit || input.clear) return;
     input.typed = take_typed_text();
     if (input.typed.empty() && !io.KeyShift) {
         if (const char sign = sign_pressed(); sign != '\0') {
@@ -102,20 +99,17 @@ int grow(ImGuiInputTextCallbackData* data) {
         data->Buf = edit.text.data();
     } else if (data->EventFlag == ImGuiInputTextFlags_CallbackAlways && !edit.open) {
         edit.open = true;
-        if (edit.caret_at_end)
-            data->CursorPos = data->SelectionStart = data->SelectionEnd = data->BufTextLen;
+        if (edit.caret_at_end) data->CursorPos = data->SelectionStart = data->SelectionEnd = data->BufTextLen;
     }
     return 0;
 }
 
 CellLeft how_left() {
     const bool shift = ImGui::GetIO().KeyShift;
-    if (pressed_once(ImGuiKey_Escape))
-        return CellLeft::cancelled;
+    if (pressed_once(ImGuiKey_Escape)) return CellLeft::cancelled;
     if (pressed_once(ImGuiKey_Enter) || pressed_once(ImGuiKey_KeypadEnter))
         return shift ? CellLeft::up : CellLeft::down;
-    if (pressed_once(ImGuiKey_Tab))
-        return shift ? CellLeft::left : CellLeft::right;
+    if (pressed_once(ImGuiKey_Tab)) return shift ? CellLeft::left : CellLeft::right;
     return CellLeft::away;
 }
 
@@ -133,8 +127,7 @@ GridInput grid_input(Ui& ui, std::string_view id, const Box& box, bool focus) {
     const ImRect rect(box.at(), box.end());
     GridInput input;
     ImGui::SetCursorScreenPos(box.at());
-    if (!ImGui::ItemAdd(rect, item))
-        return input;
+    if (!ImGui::ItemAdd(rect, item)) return input;
     const ImGuiContext& g = *GImGui;
     if (focus || ui.focus_next == id) {
         ui.focus_next.clear();
@@ -144,8 +137,7 @@ GridInput grid_input(Ui& ui, std::string_view id, const Box& box, bool focus) {
     bool held = false;
     const bool pressed = ImGui::ButtonBehavior(rect, item, &hovered, &held);
     const ImVec2 pointer = g.IO.MousePos;
-    if (hovered)
-        input.hovered = pointer;
+    if (hovered) input.hovered = pointer;
     // ButtonBehavior counts Space and Enter as presses too; those are keys here.
     if (pressed && ImGui::IsMouseReleased(ImGuiMouseButton_Left)) {
         input.pressed = pointer;
@@ -153,14 +145,14 @@ GridInput grid_input(Ui& ui, std::string_view id, const Box& box, bool focus) {
     }
     input.focused = g.NavId == item && g.NavWindow == window;
     // The key that ended the editing of a cell is no key of the table.
-    if (input.focused && !focus && (g.ActiveId == 0 || g.ActiveId == item))
-        read_keys(input, item);
+    if (input.focused && !focus && (g.ActiveId == 0 || g.ActiveId == item)) read_keys(input, item);
     return input;
 }
 
 void begin_cell_edit(CellEdit& edit) {
     ImGui::PushID(edit.id.data(), edit.id.data() + edit.id.size());
-    // Known to ImGui before the field is first drawn, so that the page learns in the same event that text is wanted.
+    // Known to ImGui before the field is first drawn, so that the page learns in the same event that text is
+    // wanted.
     GImGui->NavNextActivateId = ImGui::GetID("##text");
     GImGui->NavNextActivateFlags = ImGuiActivateFlags_PreferInput;
     ImGui::PopID();
@@ -172,12 +164,10 @@ CellLeft cell_editor(Ui& ui, CellEdit& edit, std::string_view name, const Box& b
     ImGui::PushID(edit.id.data(), edit.id.data() + edit.id.size());
     const ImGuiID item = ImGui::GetID("##text");
     const bool had_it = GImGui->ActiveId == item;
-    if (!had_it && !edit.open && GImGui->NavActivateId != item)
-        ImGui::SetKeyboardFocusHere();
+    if (!had_it && !edit.open && GImGui->NavActivateId != item) ImGui::SetKeyboardFocusHere();
     drop_echo(edit);
     // Typed before the field had the keyboard.
-    if (!had_it && !edit.open)
-        edit.text += take_typed_text();
+    if (!had_it && !edit.open) edit.text += take_typed_text();
 
     ImGui::PushFont(font(Font::strong));
     const float padding = std::max(2.0F, (box.h - font_size(Font::strong)) / 2);
@@ -223,12 +213,10 @@ std::optional<std::size_t> cell_choices(Ui& ui, std::string_view id, const std::
     constexpr float tallest = 340;
     const std::string name(id);
     ImGui::PushID(id.data(), id.data() + id.size());
-    if (open)
-        ImGui::OpenPopup("answers");
+    if (open) ImGui::OpenPopup("answers");
     open = false;
     float width = cell.w;
-    for (const auto& label : labels)
-        width = std::max(width, text_size(Font::body, label).x + 32);
+    for (const auto& label : labels) width = std::max(width, text_size(Font::body, label).x + 32);
     const ImVec2 display = ImGui::GetIO().DisplaySize;
     width = std::min(width, display.x - 8);
     const float height = std::min(row * static_cast<float>(labels.size()) + 12, tallest);
@@ -248,8 +236,7 @@ std::optional<std::size_t> cell_choices(Ui& ui, std::string_view id, const std::
             ImGui::GetWindowDrawList()->AddRectFilled(part.at(), part.end(), ground, 6);
             const OnPaper paper(ui, ground);
             const std::string part_id = name + "/" + std::to_string(i);
-            if (ImGui::IsWindowAppearing() && i == chosen.value_or(0))
-                ui.focus_next = part_id;
+            if (ImGui::IsWindowAppearing() && i == chosen.value_or(0)) ui.focus_next = part_id;
             if (press_area(ui, part_id, labels[i], part, "option", on ? "true" : "false")) {
                 result = i;
                 ImGui::CloseCurrentPopup();

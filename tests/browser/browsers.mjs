@@ -1,7 +1,7 @@
 // Debian's Chromium and Firefox, headless, without graphics acceleration, each with a profile of its own.
 
 import { spawnSync } from 'node:child_process';
-import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
+import { mkdtempSync, readdirSync, renameSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -12,6 +12,23 @@ import puppeteer from 'puppeteer-core';
 function builtPage(name) {
     const folder = process.env.STEELYARD_PAGES ?? fileURLToPath(new URL('../../build/web', import.meta.url));
     return join(folder, name + '.html');
+}
+
+export const patience = 15000; // milliseconds; what is waited for takes a fraction of a second
+
+/// Waits for a value that counts as true, and gives it.
+export async function until(what, condition) {
+    const end = Date.now() + patience;
+    for (;;) {
+        const value = await condition();
+        if (value) {
+            return value;
+        }
+        if (Date.now() > end) {
+            throw new Error('waited in vain for ' + what);
+        }
+        await new Promise((resolve) => setTimeout(resolve, 15));
+    }
 }
 
 /// The release file: what is built is what is tested.
@@ -70,11 +87,20 @@ class Browser {
         this.name = name;
         this.puppeteer = started;
         this.downloads = downloads;
+        this.taken = mkdtempSync(join(tmpdir(), 'steelyard-taken-'));
     }
 
-    /// What has been downloaded so far, by name; files still being written are left out.
-    downloaded() {
-        return readdirSync(this.downloads).filter((name) => !/\.(crdownload|part)$/.test(name));
+    /// The path of the one downloaded file with such a name, waited for, and removed before the next.
+    async download(pattern) {
+        const finished = () => {
+            const names = readdirSync(this.downloads);
+            // Beside a file still being written stands its unfinished part.
+            return names.some((name) => /\.(crdownload|part)$/.test(name)) ? [] : names.filter((name) => pattern.test(name));
+        };
+        const [name] = await until('a download like ' + pattern, () => (finished().length > 0 ? finished() : null));
+        const taken = join(this.taken, name);
+        renameSync(join(this.downloads, name), taken);
+        return taken;
     }
 
     /// Puts a text on the clipboard as a person does: typed somewhere else, marked, copied.
@@ -107,7 +133,9 @@ class Browser {
 
     async close() {
         await this.puppeteer.close();
-        rmSync(this.downloads, { recursive: true, force: true });
+        for (const folder of [this.downloads, this.taken]) {
+            rmSync(folder, { recursive: true, force: true });
+        }
     }
 }
 

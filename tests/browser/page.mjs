@@ -4,23 +4,7 @@
 import assert from 'node:assert/strict';
 import { pathToFileURL } from 'node:url';
 
-import { pageFile } from './browsers.mjs';
-
-const patience = 15000; // milliseconds; what is waited for takes a fraction of a second
-
-async function until(what, condition) {
-    const end = Date.now() + patience;
-    for (;;) {
-        const value = await condition();
-        if (value) {
-            return value;
-        }
-        if (Date.now() > end) {
-            throw new Error('waited in vain for ' + what);
-        }
-        await new Promise((resolve) => setTimeout(resolve, 15));
-    }
-}
+import { pageFile, until } from './browsers.mjs';
 
 // Runs in the page before its own scripts.
 function collectViolations() {
@@ -192,6 +176,14 @@ class SteelyardPage {
     async wheel(wanted, deltaY) {
         await this.hover(wanted);
         await this.tab.mouse.wheel({ deltaY });
+        await this.idle();
+    }
+
+    /// Presses something that asks for a file, and gives it this one.
+    async openFile(wanted, file) {
+        const { x, y } = this.middle(await this.itemOf(wanted));
+        const [chooser] = await Promise.all([this.tab.waitForFileChooser(), this.tab.mouse.click(x, y)]);
+        await chooser.accept([file]);
         await this.idle();
     }
 

@@ -22,7 +22,8 @@ inEachBrowser('the picture', (test, name) => {
         assert.deepEqual(await pictureSize(page), [1280, 720]);
         assert.equal(await page.value('size'), '1280 x 720 at 1');
 
-        for (const [width, height, density] of [[1280, 720, 1.25], [1280, 720, 2], [640, 900, 1], [1920, 1080, 0.5]]) {
+        // Size and density together: Chromium’s driver tells a page nothing of a density that changes alone.
+        for (const [width, height, density] of [[1600, 900, 1.25], [1280, 720, 2], [640, 900, 1], [1920, 1080, 0.5]]) {
             await page.resize(width, height, density);
             await page.findValue('size', `${width} x ${height} at ${density}`);
             await page.idle();

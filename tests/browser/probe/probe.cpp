@@ -152,6 +152,7 @@ struct App::State {
         show("size", number(double(io.DisplaySize.x)) + " x " + number(double(io.DisplaySize.y)) + " at " +
                          number(double(io.DisplayFramebufferScale.x)));
         show("clicks", std::to_string(clicks));
+        show("scheme", scheme);
         show("id", id);
         show("claim", claim);
         show("stored", stored);
@@ -163,7 +164,6 @@ struct App::State {
         show("pasted", pasted);
         show("right clicks", std::to_string(right_clicks));
         show("keys", keys);
-        show("scheme", scheme);
         ImGui::BeginChild("rows", ImVec2(300, 100));
         for (int row = 0; row < 50; ++row) ImGui::Text("row %d", row);
         const float scrolled = ImGui::GetScrollY();
