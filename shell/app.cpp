@@ -111,6 +111,7 @@ void App::draw() {
         if (shortcut(ImGuiKey_S)) s.save_file();
         if (shortcut(ImGuiKey_O)) s.platform.pick_file();
         s.carry_out(actions);
+        for (const auto& act : std::exchange(s.after_frame, {})) act();
     }
     ImGui::End();
     if (s.started) s.keeper.tick(s.session, static_cast<double>(io.DeltaTime));

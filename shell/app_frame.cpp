@@ -51,8 +51,8 @@ void draw_header(App::State& state, Actions& actions, Box box) {
         case FileAct::open: state.platform.pick_file(); break;
         case FileAct::save: state.save_file(); break;
         case FileAct::results: state.save_results(); break;
-        case FileAct::kept: state.show_kept(); break;
-        case FileAct::empty: state.start_empty(); break;
+        case FileAct::kept: state.after_frame.emplace_back([&state] { state.show_kept(); }); break;
+        case FileAct::empty: state.after_frame.emplace_back([&state] { state.start_empty(); }); break;
         case FileAct::dark:
             ui.theme = theme.dark ? &light_theme() : &dark_theme();
             apply_theme(*ui.theme);
@@ -150,7 +150,9 @@ void draw_example_bar(App::State& state, Box box) {
                  ? "This is an example with invented companies. Change what you like, or begin your own."
                  : "An example with invented companies.",
              right.right(), theme.brass_ink);
-    if (button(ui, "start-empty", "Start empty", empty)) state.start_empty();
+    if (button(ui, "start-empty", "Start empty", empty)) {
+        state.after_frame.emplace_back([&state] { state.start_empty(); });
+    }
     if (button(ui, "open-a-file", "Open a file", open)) state.platform.pick_file();
 }
 

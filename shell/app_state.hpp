@@ -1,6 +1,7 @@
 #pragma once
 
 #include <array>
+#include <functional>
 #include <memory>
 #include <string>
 #include <vector>
@@ -43,7 +44,9 @@ struct App::State {
     std::optional<Refusal> refusal;
     bool kept_open = false;
     std::vector<KeptDecision> kept;
-    int waiting = 0;      ///< Platform calls unanswered.
+    int waiting = 0; ///< Platform calls unanswered.
+    std::vector<std::function<void()>>
+        after_frame;      ///< What replaces the decision waits until nobody reads it.
     int fresh_frames = 2; ///< Frames still to draw after something changed outside of input.
 
     bool is_example() const;

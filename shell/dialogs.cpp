@@ -51,8 +51,10 @@ void draw_asked(App::State& state) {
     const Box go = buttons.take_right(button_width("Go on"));
     const bool cancelled = button(ui, "asked-keep", "Keep it as it is", keep) || dialog.escaped();
     if (button(ui, "asked-go", "Go on", go, ButtonKind::strong)) {
-        state.apply(std::move(state.asked->step)); // Asked already: applies at once.
-        state.asked.reset();
+        state.after_frame.emplace_back([&state] {
+            state.apply(std::move(state.asked->step)); // Asked already: applies at once.
+            state.asked.reset();
+        });
         ImGui::CloseCurrentPopup();
     } else if (cancelled) {
         state.asked.reset();
@@ -112,7 +114,7 @@ void draw_kept(App::State& state) {
             draw_text(ui, {row.x, row.y + 24}, "saved " + one.saved_at,
                       {.font = Font::small, .ink = theme.quiet});
             if (button(ui, "kept-open/" + one.id, "Open", {row.right() - 90, row.y + 6, 84, 32})) {
-                state.open_kept(one.id);
+                state.after_frame.emplace_back([&state, id = one.id] { state.open_kept(id); });
                 close = true;
             }
             y += 52;

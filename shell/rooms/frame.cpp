@@ -33,6 +33,7 @@ public:
     void draw(Ui& ui, const RoomView& view, Actions& actions, Box area) override {
         const Desk desk{ui, view, actions, state_};
         if (view.read_only) state_.paste = {};
+        frame::close_added_paste(desk);
         if (state_.paste.open) {
             frame::paste_panel(desk, area);
             return;
@@ -64,14 +65,15 @@ private:
             const float width = (box.w - 2 * gap) / 3;
             const Box left = box.take_left(width * 0.95f, gap);
             const Box middle = box.take_left(width * 1.1f, gap);
-            return std::max({stack(desk, left, {question_card, options_card, people_card}),
-                             stack(desk, middle, {criteria_card}),
-                             stack(desk, box, {musts_card, settings_card})});
+            // One after the other, since the keyboard goes through them in this order.
+            const float first = stack(desk, left, {question_card, options_card, people_card});
+            const float second = stack(desk, middle, {criteria_card});
+            return std::max({first, second, stack(desk, box, {musts_card, settings_card})});
         }
         if (box.w >= two_columns) {
             const Box left = box.take_left(box.w * 0.43f, gap);
-            return std::max(stack(desk, left, {question_card, options_card, people_card, settings_card}),
-                            stack(desk, box, {criteria_card, musts_card}));
+            const float first = stack(desk, left, {question_card, options_card, people_card, settings_card});
+            return std::max(first, stack(desk, box, {criteria_card, musts_card}));
         }
         return stack(desk, box,
                      {question_card, options_card, criteria_card, musts_card, people_card, settings_card});
@@ -82,7 +84,7 @@ private:
         const Decision& d = desk.decision();
         if (find_node(d.criteria, id) != nullptr) {
             state_.node = id;
-            desk.ui.focus_next = "node/" + id;
+            desk.ui.focus_next = frame::row_id(id);
         } else if (find_requirement(d, id) != nullptr) {
             state_.must = id;
             desk.ui.focus_next = "must-more/" + id;

@@ -76,6 +76,7 @@ public:
                 fresh_id(slug(item.name, "criterion"), [&](const Id& id) { return taken_.contains(id); }));
             taken_.insert(ids_.back());
         }
+        plan_.first = ids_.front();
         weigh_parent();
         for (std::size_t i = 0; i < items_.size(); ++i) {
             if (parents_[i] == items_.size()) plan_.edits.push_back(AddNode{parent_.id, node_of(i)});

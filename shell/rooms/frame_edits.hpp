@@ -43,6 +43,7 @@ Requirement of_kind(Requirement requirement, MustKind kind, const Id& node);
 struct ListPlan {
     std::vector<Edit> edits; ///< One step. Empty if there is a problem or nothing to add.
     std::string label;
+    Id first;                                  ///< The first criterion that is added.
     std::string problem;                       ///< A sentence; empty if the list can be added.
     std::vector<std::string> notes;            ///< Sentences worth reading before.
     std::vector<std::optional<double>> shares; ///< Beside the items: the part of its group a weight gives it.

@@ -122,9 +122,9 @@ void limits_part(const Desk& desk, Column& column, const Requirement& must) {
     column.y = left.y;
     if (kind_of(must) == MustKind::own_limit) {
         Column half{column.x, column.y, left.w};
-        if (auto unit = captioned_line(desk, half, "must-unit/" + must.id, "Unit", must.unit)) {
+        if (auto text = captioned_line(desk, half, "must-unit/" + must.id, "Unit", must.unit)) {
             changed = must;
-            changed.unit = std::move(*unit);
+            changed.unit = std::move(*text);
             change(desk, std::move(changed));
         }
         column.y = half.y;

@@ -108,6 +108,9 @@ void node_panel(const Desk& desk, Column& column, const Node& node) {
         Node changed = node;
         changed.name = std::move(*name);
         change(desk, std::move(changed));
+        // Back to the row, where a key adds the next one.
+        if (ImGui::IsKeyPressed(ImGuiKey_Enter) || ImGui::IsKeyPressed(ImGuiKey_KeypadEnter))
+            desk.ui.focus_next = row_id(node.id);
     }
     if (!node.is_leaf())
         group_part(desk, column, node);

@@ -25,6 +25,7 @@ struct State {
         std::string text;
         Id parent;
         LineEnds ends = LineEnds::weights;
+        Id added; ///< The first criterion of the list asked for; the panel closes when it is there.
     };
     Paste paste;
 };
@@ -134,11 +135,17 @@ float settings_card(const Desk& desk, ImVec2 at, float width);
 /// What stands below the row of the opened criterion.
 void node_panel(const Desk& desk, Column& column, const Node& node);
 
+/// The id of a criterion's row, for the keyboard to go to.
+std::string row_id(const Id& node);
+
 /// Adds a criterion under another one, opens it and puts the keyboard into its name.
 void add_criterion(const Desk& desk, const Id& parent, std::size_t at = at_end);
 
 /// A pasted list with what would be made of it. Takes the whole room while it is open.
 void open_paste(State& state, const Decision& decision, const std::string& text);
+/// Closes the panel once what it asked for was carried out. It stays where the person kept things as they
+/// are.
+void close_added_paste(const Desk& desk);
 void paste_panel(const Desk& desk, const Box& area);
 
 } // namespace steelyard::frame

@@ -5,6 +5,7 @@
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/frame_edits.hpp"
 #include "shell/rooms/frame_parts.hpp"
+#include "shell/rooms/growing_card.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
@@ -104,6 +105,27 @@ void choices(const Desk& desk, Column& column, const Outline& outline) {
         paste.ends = *weights ? LineEnds::weights : LineEnds::names;
 }
 
+/// The list as text and what would be made of it, beside each other or, in a narrow room, one below the
+/// other.
+void list_and_preview(const Desk& desk, const Box& box, const Outline& outline, const ListPlan& plan) {
+    State::Paste& paste = desk.state.paste;
+    ScrollArea scroll(desk.ui, "paste", box);
+    const Box in = scroll.inner();
+    Column column{in.x, in.y, cards_width(box, in)};
+    draw_text(desk.ui, {column.x, column.y}, "Add a list of criteria", {.font = Font::heading});
+    column.y += line_step(Font::heading) + 8;
+    choices(desk, column, outline);
+
+    const bool beside = column.w >= side_by_side;
+    const float least = beside ? 200.0f : 320.0f; // Less is too little to read: then it is scrolled.
+    Box work{column.x, column.y, column.w, std::max(in.y + box.h - column.y, least)};
+    const Box typed =
+        beside ? work.take_left((work.w - 12) / 2, 12) : work.take_top((work.h - 10) * 0.4f, 10);
+    if (auto text = text_area(desk.ui, text_id, "The list", paste.text, typed)) paste.text = std::move(*text);
+    preview(desk, outline, plan, work);
+    scroll.reach(work.bottom());
+}
+
 std::string add_label(std::size_t count) {
     if (count == 0) return "Add";
     return count == 1 ? "Add 1 criterion" : "Add " + std::to_string(count) + " criteria";
@@ -113,7 +135,14 @@ std::string add_label(std::size_t count) {
 
 void open_paste(State& state, const Decision& decision, const std::string& text) {
     const bool found = find_node(decision.criteria, state.node) != nullptr;
-    state.paste = {true, text, found ? state.node : decision.criteria.id, LineEnds::weights};
+    state.paste = {true, text, found ? state.node : decision.criteria.id, LineEnds::weights, {}};
+}
+
+void close_added_paste(const Desk& desk) {
+    const Id& added = desk.state.paste.added;
+    if (added.empty() || find_node(desk.decision().criteria, added) == nullptr) return;
+    desk.ui.focus_next = row_id(added);
+    desk.state.paste = {};
 }
 
 void paste_panel(const Desk& desk, const Box& area) {
@@ -124,17 +153,7 @@ void paste_panel(const Desk& desk, const Box& area) {
 
     Box rest = area;
     const Box buttons = rest.take_bottom(36, 12);
-    Column column{rest.x, rest.y, rest.w};
-    draw_text(desk.ui, {column.x, column.y}, "Add a list of criteria", {.font = Font::heading});
-    column.y += line_step(Font::heading) + 8;
-    choices(desk, column, outline);
-
-    Box work{rest.x, column.y, rest.w, std::max(rest.bottom() - column.y, 60.0f)};
-    const bool beside = work.w >= side_by_side;
-    const Box typed =
-        beside ? work.take_left((work.w - 12) / 2, 12) : work.take_top((work.h - 10) * 0.4f, 10);
-    if (auto text = text_area(desk.ui, text_id, "The list", paste.text, typed)) paste.text = std::move(*text);
-    preview(desk, outline, plan, work);
+    list_and_preview(desk, rest, outline, plan);
 
     const std::string label = add_label(plan.edits.empty() ? 0 : outline.items.size());
     Box row = buttons;
@@ -142,8 +161,8 @@ void paste_panel(const Desk& desk, const Box& area) {
     const Box cancel = row.take_right(button_width("Cancel"));
     if (button(desk.ui, "paste-add", label, add, ButtonKind::strong,
                !plan.edits.empty() && desk.may_edit())) {
+        paste.added = plan.first;
         desk.actions.edit(plan.edits, plan.label);
-        paste = {};
     }
     const bool escaped = draft == nullptr && ImGui::IsKeyPressed(ImGuiKey_Escape, false) &&
                          !ImGui::IsPopupOpen("", ImGuiPopupFlags_AnyPopupId | ImGuiPopupFlags_AnyPopupLevel);

@@ -45,8 +45,9 @@ void scores_part(const Desk& desk, Column& column, Settings& s) {
         s.synthesis = static_cast<Synthesis>(*now);
     remark(desk, column,
            s.synthesis == Synthesis::ideal
-               ? "Ideal: the best option on a criterion gets its whole weight, the others a part of it. "
-                 "Another option changes the order of the rest only if it becomes the best on something."
+               ? "Ideal: each option keeps its own worth on a criterion, 1 being the best; where options are "
+                 "compared in pairs the best of them gets 1. An option that is nowhere the best changes "
+                 "little for the others."
                : "Distributive: the options share the weight of each criterion. Every option that comes or "
                  "goes changes what the others get.");
 }

@@ -1,3 +1,5 @@
+#include <imgui_internal.h>
+
 #include <algorithm>
 #include <cmath>
 #include <string>
@@ -19,10 +21,6 @@ namespace {
 constexpr float row_height = 32;
 constexpr float step = 20; ///< Indentation of one level.
 constexpr float weight_width = 64;
-
-std::string row_id(const Id& node) {
-    return "node/" + node;
-}
 
 std::string shown_name(const Node& node) {
     return node.name.empty() ? node.id : node.name;
@@ -91,6 +89,8 @@ void draw_row(const Desk& desk, const PlacedNode& placed, const Box& row) {
     const std::string name = shown_name(node);
     const bool pressed = press_area(ui, row_id(node.id), name, row, "treeitem", percent);
     const bool focused = ImGui::IsItemFocused();
+    // Alt moves criteria here; ImGui would take the keyboard to another window when it is let go.
+    if (focused) ImGui::SetKeyOwner(ImGuiMod_Alt, ImGui::GetItemID());
     if (pressed) {
         const bool twice = ImGui::GetIO().MouseClickedLastCount[0] == 2 && ImGui::IsMouseReleased(0);
         if (twice) {
@@ -133,6 +133,10 @@ void draw_branches(const Desk& desk, const std::vector<bool>& lasts, const Box& 
 }
 
 } // namespace
+
+std::string row_id(const Id& node) {
+    return "node/" + node;
+}
 
 void add_criterion(const Desk& desk, const Id& parent, std::size_t at) {
     Node node;
@@ -183,7 +187,10 @@ float criteria_card(const Desk& desk, ImVec2 at, float width) {
             else
                 add_criterion(desk, chosen != nullptr ? chosen->id : desk.decision().criteria.id);
         }
-        if (row.button("paste-open", "Paste a list")) open_paste(desk.state, desk.decision(), {});
+        if (row.button("paste-open", "Paste a list")) {
+            open_paste(desk.state, desk.decision(), {});
+            desk.ui.focus_next = "paste-text";
+        }
     }
     if (desk.may_edit()) {
         remark(desk, column,

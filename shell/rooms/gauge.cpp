@@ -32,7 +32,8 @@ public:
         const bool stacked = inside.w < narrowest_side_by_side;
         if (inside.h >= lowest_room && !stacked) {
             draw_heading(ui, view, inside.take_top(heading_height, 8));
-            const Box cards = inside.take_bottom(std::clamp(0.38F * inside.h, lowest_cards, highest_cards), gap);
+            const Box cards =
+                inside.take_bottom(std::clamp(0.38F * inside.h, lowest_cards, highest_cards), gap);
             draw_main(ui, view, actions, inside, cards);
             return;
         }
@@ -52,13 +53,10 @@ public:
     bool paste(const std::string& text, const RoomView& view, Actions& actions) override {
         update(view);
         const auto now = chosen(model_, view.decision, table_);
-        if (!now || view.read_only || !model_.rows[now->row].typed())
-            return false;
+        if (!now || view.read_only || !model_.rows[now->row].typed()) return false;
         std::string value = text;
-        while (!value.empty() && (value.back() == '\n' || value.back() == '\r'))
-            value.pop_back();
-        if (value.empty() || value.find_first_of("\n\t") != std::string::npos)
-            return false;
+        while (!value.empty() && (value.back() == '\n' || value.back() == '\r')) value.pop_back();
+        if (value.empty() || value.find_first_of("\n\t") != std::string::npos) return false;
         if (const auto problem = enter_text(view, actions, model_.rows[now->row], table_.option, value))
             actions.say(*problem);
         return true;
@@ -77,13 +75,11 @@ private:
             show_now(view.decision, wanted_);
             wanted_.clear();
         }
-        if (!chosen(model_, view.decision, table_))
-            choose_something(view.decision);
+        if (!chosen(model_, view.decision, table_)) choose_something(view.decision);
     }
 
     void show_now(const Decision& decision, const Id& id) {
-        if (decision.options.empty())
-            return;
+        if (decision.options.empty()) return;
         if (find_option(decision, id) != nullptr) {
             table_.option = id;
             table_.reveal = true;
@@ -94,8 +90,7 @@ private:
 
     /// The first open cell, or the first of all, so that the cards below have something to show.
     void choose_something(const Decision& decision) {
-        if (decision.options.empty())
-            return;
+        if (decision.options.empty()) return;
         const auto first = [&](auto fits) {
             return std::find_if(model_.rows.begin(), model_.rows.end(),
                                 [&](const Row& row) { return !row.cells.empty() && fits(row); });
@@ -103,10 +98,8 @@ private:
         auto row = first([](const Row& r) {
             return std::any_of(r.cells.begin(), r.cells.end(), [](const Cell& cell) { return cell.open; });
         });
-        if (row == model_.rows.end())
-            row = first([](const Row&) { return true; });
-        if (row == model_.rows.end())
-            return;
+        if (row == model_.rows.end()) row = first([](const Row&) { return true; });
+        if (row == model_.rows.end()) return;
         choose_row(model_, decision, table_, row->id, row->is_must());
         table_.take_keyboard = false;
         table_.reveal = false; // What one comes upon is the top of the table.
@@ -134,16 +127,18 @@ private:
             return;
         }
         // By value: the table may move the choice, and the cards are to show the one it was drawn with.
-        const Chosen shown = *now;
+        const Place shown = *now;
         draw_table(ui, view, actions, model_, table_, table);
         const bool stacked = cards.w < narrowest_side_by_side;
-        const Box left = stacked ? cards.take_top((cards.h - gap) / 2, gap) : cards.take_left(0.56F * cards.w, gap);
+        const Box left =
+            stacked ? cards.take_top((cards.h - gap) / 2, gap) : cards.take_left(0.56F * cards.w, gap);
         const Row& row = model_.rows[shown.row];
         draw_left(ui, view, actions, row, view.decision.options[shown.option].id, left);
         draw_detail_card(ui, view, actions, row, shown.option, cards);
     }
 
-    static void draw_left(Ui& ui, const RoomView& view, Actions& actions, const Row& row, const Id& option, Box box) {
+    static void draw_left(Ui& ui, const RoomView& view, Actions& actions, const Row& row, const Id& option,
+                          Box box) {
         if (row.is_must()) {
             draw_must_card(ui, view, actions, *find_requirement(view.decision, row.id), option, box);
             return;

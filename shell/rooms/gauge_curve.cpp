@@ -23,14 +23,12 @@ const ComputedFigures* computed_of(const Results& results, const Id& leaf) {
 }
 
 std::vector<double> anchors_of(const Curve& curve) {
-    if (const auto* line = std::get_if<LineCurve>(&curve.shape))
-        return {line->worst, line->best};
+    if (const auto* line = std::get_if<LineCurve>(&curve.shape)) return {line->worst, line->best};
     if (const auto* target = std::get_if<TargetCurve>(&curve.shape))
         return {target->target - target->tolerance, target->target, target->target + target->tolerance};
     std::vector<double> anchors;
     if (const auto* points = std::get_if<PointsCurve>(&curve.shape)) {
-        for (const auto& point : points->at)
-            anchors.push_back(point[0]);
+        for (const auto& point : points->at) anchors.push_back(point[0]);
     }
     return anchors;
 }
@@ -42,9 +40,9 @@ Plot plot_of(const RoomView& view, const Node& leaf, const Id& option) {
     for (std::size_t o = 0; o < view.decision.options.size(); ++o) {
         const Id& id = view.decision.options[o].id;
         const auto figure = figure_of(view, leaf, id);
-        if (!figure)
-            continue;
-        PlotMark mark{.index = o, .figure = *figure, .in_play = in_play(view.results, id), .chosen = id == option};
+        if (!figure) continue;
+        PlotMark mark{
+            .index = o, .figure = *figure, .in_play = in_play(view.results, id), .chosen = id == option};
         if (const Figure* entry = leaf.cost_sheet ? nullptr : standing_figure(view.decision, leaf.id, id)) {
             mark.low = entry->low;
             mark.high = entry->high;
@@ -53,8 +51,7 @@ Plot plot_of(const RoomView& view, const Node& leaf, const Id& option) {
             largest = std::max(largest, worth_of(*leaf.curve, *figure).value_or(0));
         plot.marks.push_back(mark);
     }
-    if (!leaf.curve)
-        return plot;
+    if (!leaf.curve) return plot;
     plot.name += ": " + curve_words(*leaf.curve);
     plot.anchors = anchors_of(*leaf.curve);
     // Proportional worths are drawn against the best in play, which is worth 1.
@@ -69,10 +66,7 @@ Plot plot_of(const RoomView& view, const Node& leaf, const Id& option) {
 class CurveCard {
 public:
     CurveCard(Ui& ui, const RoomView& view, Actions& actions, const Node& leaf)
-        : ui_(ui),
-          view_(view),
-          actions_(actions),
-          leaf_(leaf) {
+        : ui_(ui), view_(view), actions_(actions), leaf_(leaf) {
         const auto* computed = computed_of(view.results, leaf.id);
         figures_ = known_figures(view.decision, leaf, computed != nullptr ? &computed->values : nullptr);
     }
@@ -83,7 +77,8 @@ public:
         const Box column = inside.take_right(std::min(column_width, 0.5F * inside.w), 14);
         const Plot plot = plot_of(view_, leaf_, option);
         if (plot.marks.empty() && !leaf_.curve) {
-            draw_paragraph(ui_, inside.at(), inside.w, "No figures yet. Once two are known, they can be given a worth.",
+            draw_paragraph(ui_, inside.at(), inside.w,
+                           "No figures yet. Once two are known, they can be given a worth.",
                            {.ink = ui_.look().quiet});
         } else {
             draw_plot(ui_, plot, {inside.x, inside.y, inside.w, inside.h + 4});
@@ -96,7 +91,9 @@ public:
     }
 
 private:
-    std::string name(const char* what) const { return std::string(what) + " of " + node_name(view_.decision, leaf_.id); }
+    std::string name(const char* what) const {
+        return std::string(what) + " of " + node_name(view_.decision, leaf_.id);
+    }
 
     void change(std::optional<Curve> curve) {
         Node node = leaf_;
@@ -124,8 +121,7 @@ private:
             node.unit = *unit;
             actions_.edit(ChangeNode{std::move(node)});
         }
-        if (form.link("rate-in-frame", "Rate otherwise in Frame"))
-            actions_.go(RoomId::frame, leaf_.id);
+        if (form.link("rate-in-frame", "Rate otherwise in Frame")) actions_.go(RoomId::frame, leaf_.id);
     }
 
     void suggest(Form& form) {
@@ -134,20 +130,18 @@ private:
             form.sentence("With two different figures a line from the worst to the best can be suggested.");
             return;
         }
-        draw_text(ui_, {form.rest().x, form.bottom()}, "Suggest a line from the quotes", {.font = Font::small});
+        draw_text(ui_, {form.rest().x, form.bottom()}, "Suggest a line from the quotes",
+                  {.font = Font::small});
         form.space(22);
-        if (form.press("suggest-less", "Less is better"))
-            change(suggested_line(figures_, Better::less));
-        if (form.press("suggest-more", "More is better"))
-            change(suggested_line(figures_, Better::more));
+        if (form.press("suggest-less", "Less is better")) change(suggested_line(figures_, Better::less));
+        if (form.press("suggest-more", "More is better")) change(suggested_line(figures_, Better::more));
     }
 
     void pick_kind(Form& form) {
         static const std::vector<std::string> kinds{"straight line", "proportional", "points", "target"};
         const auto now = static_cast<std::size_t>(kind_of(*leaf_.curve));
         const auto kind = form.pick("curve-kind", "Kind of curve", name("Kind of curve"), kinds, now);
-        if (!kind)
-            return;
+        if (!kind) return;
         if (auto curve = as_kind(static_cast<CurveKind>(*kind), leaf_.curve, figures_)) {
             change(std::move(curve));
         } else {
@@ -156,21 +150,21 @@ private:
     }
 
     void anchors(Form& form, const ProportionalCurve& shape) {
-        const auto better = form.pick("curve-better", "Better is", name("Which figures are better on the curve"),
-                                      {"more", "less"}, shape.better == Better::more ? 0 : 1);
-        if (better)
-            reshape(ProportionalCurve{*better == 0 ? Better::more : Better::less});
+        const auto better =
+            form.pick("curve-better", "Better is", name("Which figures are better on the curve"),
+                      {"more", "less"}, shape.better == Better::more ? 0 : 1);
+        if (better) reshape(ProportionalCurve{*better == 0 ? Better::more : Better::less});
         form.sentence(shape.better == Better::less ? "Half the figure is worth twice as much."
                                                    : "Twice the figure is worth twice as much.");
     }
 
     void anchors(Form& form, const LineCurve& shape) {
-        const auto worst = form.number("curve-worst", "None at", name("Figure worth nothing"), shape.worst, 0, 2);
+        const auto worst =
+            form.number("curve-worst", "None at", name("Figure worth nothing"), shape.worst, 0, 2);
         const auto best = form.number("curve-best", "Full at", name("Figure worth full"), shape.best, 1, 2);
         const LineCurve line{worst ? worst->value_or(shape.worst) : shape.worst,
                              best ? best->value_or(shape.best) : shape.best};
-        if (line == shape)
-            return;
+        if (line == shape) return;
         if (line.worst == line.best) {
             actions_.say("The two ends of a line must differ.");
             return;
@@ -184,8 +178,7 @@ private:
                                       shape.tolerance, 1, 2);
         const TargetCurve next{target ? target->value_or(shape.target) : shape.target,
                                away ? away->value_or(shape.tolerance) : shape.tolerance};
-        if (next == shape)
-            return;
+        if (next == shape) return;
         if (next.tolerance <= 0) {
             actions_.say("The distance from the target must be above 0.");
             return;
@@ -199,7 +192,8 @@ private:
         const Box labels = form.rest();
         const float width = (labels.w - 24 - 16) / 2;
         draw_text(ui_, labels.at(), "Figure", {.font = Font::small, .ink = ui_.look().quiet});
-        draw_text(ui_, {labels.x + width + 8, labels.y}, "Worth", {.font = Font::small, .ink = ui_.look().quiet});
+        draw_text(ui_, {labels.x + width + 8, labels.y}, "Worth",
+                  {.font = Font::small, .ink = ui_.look().quiet});
         form.space(18);
         std::optional<std::size_t> removed;
         for (std::size_t i = 0; i < at.size(); ++i) {
@@ -212,8 +206,9 @@ private:
             const auto y = second.number(id + "/y", {}, name(("Worth of " + which).c_str()), at[i][1]);
             changed = changed || (x && *x) || (y && *y);
             at[i] = {x ? x->value_or(at[i][0]) : at[i][0], y ? y->value_or(at[i][1]) : at[i][1]};
-            if (icon_button(ui_, id + "/remove", "Remove " + which, {line.x + 2 * width + 16, line.y + 4, 24, 24},
-                            Icon::remove, !view_.read_only && at.size() > 1))
+            if (icon_button(ui_, id + "/remove", "Remove " + which,
+                            {line.x + 2 * width + 16, line.y + 4, 24, 24}, Icon::remove,
+                            !view_.read_only && at.size() > 1))
                 removed = i;
             form.space(36);
         }
@@ -236,7 +231,8 @@ private:
         const bool outside =
             std::any_of(at.begin(), at.end(), [](const auto& point) { return point[1] < 0 || point[1] > 1; });
         if (twice || outside) {
-            actions_.say(twice ? "Two points cannot stand at the same figure." : "A worth lies between 0 and 1.");
+            actions_.say(twice ? "Two points cannot stand at the same figure."
+                               : "A worth lies between 0 and 1.");
             return;
         }
         reshape(PointsCurve{std::move(at)});
@@ -250,8 +246,7 @@ private:
         }
         std::size_t widest = 1;
         for (std::size_t i = 2; i < at.size(); ++i) {
-            if (at[i][0] - at[i - 1][0] > at[widest][0] - at[widest - 1][0])
-                widest = i;
+            if (at[i][0] - at[i - 1][0] > at[widest][0] - at[widest - 1][0]) widest = i;
         }
         const std::array<double, 2> middle{(at[widest][0] + at[widest - 1][0]) / 2,
                                            (at[widest][1] + at[widest - 1][1]) / 2};
@@ -267,7 +262,8 @@ private:
 
 } // namespace
 
-void draw_curve_card(Ui& ui, const RoomView& view, Actions& actions, const Node& leaf, const Id& option, Box box) {
+void draw_curve_card(Ui& ui, const RoomView& view, Actions& actions, const Node& leaf, const Id& option,
+                     Box box) {
     CurveCard(ui, view, actions, leaf).draw(option, box);
 }
 
@@ -277,11 +273,9 @@ std::optional<double> figure_of(const RoomView& view, const Node& leaf, const Id
         return figure != nullptr ? figure->value : std::nullopt;
     }
     const ComputedFigures* computed = computed_of(view.results, leaf.id);
-    if (computed == nullptr)
-        return std::nullopt;
+    if (computed == nullptr) return std::nullopt;
     for (const auto& [id, value] : computed->values) {
-        if (id == option)
-            return value;
+        if (id == option) return value;
     }
     return std::nullopt;
 }
@@ -290,8 +284,7 @@ std::optional<LocalWorth> local_worth(const Results& results, const Id& leaf, co
     const auto at = std::find(results.options.begin(), results.options.end(), option);
     const auto found = std::find_if(results.leaves.begin(), results.leaves.end(),
                                     [&](const LeafResult& one) { return one.leaf == leaf; });
-    if (at == results.options.end() || found == results.leaves.end())
-        return std::nullopt;
+    if (at == results.options.end() || found == results.leaves.end()) return std::nullopt;
     const auto o = static_cast<std::size_t>(at - results.options.begin());
     return LocalWorth{found->local[o], found->missing[o]};
 }

@@ -19,15 +19,13 @@ namespace {
 
 /// Takes a finished number into an entry. True if it changed.
 bool take(const std::optional<std::optional<double>>& typed, std::optional<double>& into) {
-    if (!typed || *typed == into)
-        return false;
+    if (!typed || *typed == into) return false;
     into = *typed;
     return true;
 }
 
 bool take(const std::optional<std::string>& typed, std::string& into) {
-    if (!typed || *typed == into)
-        return false;
+    if (!typed || *typed == into) return false;
     into = *typed;
     return true;
 }
@@ -35,14 +33,10 @@ bool take(const std::optional<std::string>& typed, std::string& into) {
 std::string cost_words(const Cost& cost, const std::string& unit) {
     std::string text = figure_text(*cost.value) + " " + (cost.currency.empty() ? unit : cost.currency);
     switch (cost.kind) {
-    case CostKind::once:
-        return text + " once";
-    case CostKind::per_year:
-        return text + " a year";
-    case CostKind::per_part:
-        return text + " a part";
-    case CostKind::in_year:
-        break;
+    case CostKind::once: return text + " once";
+    case CostKind::per_year: return text + " a year";
+    case CostKind::per_part: return text + " a part";
+    case CostKind::in_year: break;
     }
     return text + " in year " + std::to_string(cost.year.value_or(0));
 }
@@ -50,8 +44,7 @@ std::string cost_words(const Cost& cost, const std::string& unit) {
 std::string sheet_words(const CostSheet& sheet) {
     std::string text = std::to_string(sheet.years) + (sheet.years == 1 ? " year" : " years") + " at " +
                        figure_text(100 * sheet.discount) + " %";
-    if (sheet.volume)
-        text += ", " + figure_text(*sheet.volume) + " parts a year";
+    if (sheet.volume) text += ", " + figure_text(*sheet.volume) + " parts a year";
     return text;
 }
 
@@ -59,6 +52,12 @@ std::string result_words(CostResult result) {
     return result == CostResult::total      ? "Present value"
            : result == CostResult::per_year ? "A year, at equal rates"
                                             : "A part, at equal rates";
+}
+
+/// A long unit stands at the row of the table only.
+std::string value_label(const std::string& unit) {
+    constexpr std::size_t longest = 7;
+    return unit.empty() || unit.size() > longest ? "Value" : "Value, " + unit;
 }
 
 class DetailCard {
@@ -70,51 +69,36 @@ public:
           row_(row),
           at_(option),
           option_(view.decision.options[option].id),
-          name_(row.title + " of " + option_name(view.decision, option_)) {}
+          name_(cell_name(row, view.decision, option_)) {}
 
     void draw(Box box) {
         const Card card(ui_, box);
         const auto local = row_.is_must() ? std::nullopt : local_worth(view_.results, row_.id, option_);
-        const std::string worth = local && !local->stand_in ? "worth " + worth_text(local->worth) : std::string{};
-        const Box inside = card_title(ui_, box, option_name(view_.decision, option_) + " \xC2\xB7 " + row_.title, at_,
-                                      in_play(view_.results, option_), worth);
+        const std::string worth =
+            local && !local->stand_in ? "worth " + worth_text(local->worth) : std::string{};
+        const Box inside =
+            card_title(ui_, box, option_name(view_.decision, option_) + " \xC2\xB7 " + row_.title, at_,
+                       in_play(view_.results, option_), worth);
         ScrollArea area(ui_, "gauge-detail", {inside.x - 4, inside.y - 4, inside.w + 8, inside.h + 8});
         const Box inner = area.inner();
         Form form(ui_, view_, actions_, {inner.x + 4, inner.y + 4, inner.w - 8, inside.h});
         // So that a text half typed for one cell never ends up in another.
         ImGui::PushID(name_.data(), name_.data() + name_.size());
         switch (row_.kind) {
-        case RowKind::figure:
-            figure(form);
-            break;
-        case RowKind::sheet:
-            sheet(form);
-            break;
-        case RowKind::grade:
-            grade(form);
-            break;
-        case RowKind::pairs:
-            pairs(form);
-            break;
-        case RowKind::must_limit:
-            must_limit(form);
-            break;
-        case RowKind::must_yes_no:
-            must_yes_no(form);
-            break;
-        case RowKind::must_read:
-            must_read(form);
-            break;
-        case RowKind::must_node:
-            must_node(form);
-            break;
-        case RowKind::section:
-            break;
+        case RowKind::figure: figure(form); break;
+        case RowKind::sheet: sheet(form); break;
+        case RowKind::grade: grade(form); break;
+        case RowKind::pairs: pairs(form); break;
+        case RowKind::must_limit: must_limit(form); break;
+        case RowKind::must_yes_no: must_yes_no(form); break;
+        case RowKind::must_read: must_read(form); break;
+        case RowKind::must_node: must_node(form); break;
+        case RowKind::section: break;
         }
         ImGui::PopID();
         if (local && local->stand_in)
-            form.sentence("Until it is known, " + option_name(view_.decision, option_) + " counts here with " +
-                              worth_text(local->worth) + ", the mean of the others.",
+            form.sentence("Until it is known, " + option_name(view_.decision, option_) +
+                              " counts here with " + worth_text(local->worth) + ", the mean of the others.",
                           Tone::open);
         area.reach(form.bottom());
     }
@@ -125,26 +109,28 @@ private:
     bool refused(const std::optional<double>& low, const std::optional<double>& value,
                  const std::optional<double>& high) {
         const std::string problem = range_problem(low, value, high);
-        if (!problem.empty())
-            actions_.say(problem);
+        if (!problem.empty()) actions_.say(problem);
         return !problem.empty();
     }
 
     void figure(Form& form) {
         const Node* leaf = find_node(view_.decision.criteria, row_.id);
         Figure entry = figure_to_change(view_.decision, row_.id, option_);
-        const std::string value_label = leaf->unit.empty() ? "Value" : "Value, " + leaf->unit;
-        const auto value = form.number("figure-value", value_label, name("Value"), entry.value, 0, 3);
+        const auto value =
+            form.number("figure-value", value_label(leaf->unit), name("Value"), entry.value, 0, 3);
         const auto low = form.number("figure-low", "Low", name("Low end"), entry.low, 1, 3);
         const auto high = form.number("figure-high", "High", name("High end"), entry.high, 2, 3);
-        static const std::vector<std::string> statuses{"not said", "budget", "quoted", "spoken", "confirmed", "measured"};
+        static const std::vector<std::string> statuses{"not said", "budget",    "quoted",
+                                                       "spoken",   "confirmed", "measured"};
         const auto round = form.number("figure-round", "Round", name("Round"), entry.round, 0, 3);
         const auto status = form.pick("figure-status", "Status", name("Status"), statuses,
                                       static_cast<std::size_t>(entry.status), 1, 3);
-        const auto until = form.text("figure-until", "Valid until", name("Valid until"), entry.valid_until, 2, 3);
+        const auto until =
+            form.text("figure-until", "Valid until", name("Valid until"), entry.valid_until, 2, 3);
         const auto source = form.text("figure-source", "Source", name("Source"), entry.source);
         const auto note = form.text("figure-note", "Note", name("Note"), entry.note);
-        if (value && *value != entry.value && (!*value || !entry.low || !entry.high || **value < *entry.low || **value > *entry.high)) {
+        if (value && *value != entry.value &&
+            (!*value || !entry.low || !entry.high || **value < *entry.low || **value > *entry.high)) {
             // Another quote: what was said of the one before does not hold for it.
             actions_.edit(Enter<Figure>{typed_figure(view_.decision, row_.id, option_, *value)});
         } else {
@@ -158,8 +144,7 @@ private:
                 entry.status = static_cast<QuoteStatus>(*status);
                 changed = true;
             }
-            if (round)
-                changed = take_round(*round, entry) || changed;
+            if (round) changed = take_round(*round, entry) || changed;
             if (changed && !refused(entry.low, entry.value, entry.high))
                 actions_.edit(Enter<Figure>{std::move(entry)});
         }
@@ -184,8 +169,7 @@ private:
             form.sentence("Runs out before the day of the decision, " + by + ".", Tone::open);
         for (const Figure* before : superseded(view_.decision, row_.id, option_)) {
             std::string when = before->round ? "Round " + std::to_string(*before->round) : "Earlier";
-            if (before->status != QuoteStatus::unstated)
-                when += ", " + std::string(word(before->status));
+            if (before->status != QuoteStatus::unstated) when += ", " + std::string(word(before->status));
             form.fact(when, figure_text(*before->value) + " (superseded)");
         }
     }
@@ -195,11 +179,11 @@ private:
         form.sentence(sheet_words(*leaf->cost_sheet));
         const ByPlace<Cost> costs(view_.decision.costs);
         const auto lines = standing_costs(costs.at(row_.id, option_));
-        for (const Cost* line : lines)
-            form.fact(line->line, cost_words(*line, leaf->unit));
+        for (const Cost* line : lines) form.fact(line->line, cost_words(*line, leaf->unit));
         if (const auto total = figure_of(view_, *leaf, option_)) {
             form.space(4);
-            form.fact(result_words(leaf->cost_sheet->result), figure_text(*total, std::abs(*total) >= 1000 ? 0 : 2) + " " + leaf->unit);
+            form.fact(result_words(leaf->cost_sheet->result),
+                      figure_text(*total, std::abs(*total) >= 1000 ? 0 : 2) + " " + leaf->unit);
         } else {
             form.sentence("The sheet gives no figure yet.", Tone::open);
         }
@@ -207,28 +191,28 @@ private:
 
     void grade(Form& form) {
         const Answers answers = answers_of(view_, row_, option_);
-        const std::string who = view_.person.empty() ? "Agreed grade" : "Grade by " + person_name(view_.decision, view_.person);
+        const std::string who =
+            view_.person.empty() ? "Agreed grade" : "Grade by " + person_name(view_.decision, view_.person);
         const std::size_t none = answers.labels.size() - 1;
-        if (const auto answer = form.pick("grade-pick", who, who + ": " + name_, answers.labels, answers.standing.value_or(none)))
+        if (const auto answer = form.pick("grade-pick", who, who + ": " + name_, answers.labels,
+                                          answers.standing.value_or(none)))
             enter_answer(view_, actions_, row_, option_, *answer);
         if (answers.standing) {
             GradeEntry entry = grade_to_change(view_.decision, row_.id, option_, view_.person);
-            bool changed = take(form.text("grade-source", "Source", name("Source"), entry.source), entry.source);
-            changed = take(form.text("grade-note", "Reason", name("Reason"), entry.note), entry.note) || changed;
-            if (changed)
-                actions_.edit(Enter<GradeEntry>{std::move(entry)});
+            bool changed =
+                take(form.text("grade-source", "Source", name("Source"), entry.source), entry.source);
+            changed =
+                take(form.text("grade-note", "Reason", name("Reason"), entry.note), entry.note) || changed;
+            if (changed) actions_.edit(Enter<GradeEntry>{std::move(entry)});
         }
-        if (!view_.person.empty())
-            return;
+        if (!view_.person.empty()) return;
         const Node* leaf = find_node(view_.decision.criteria, row_.id);
         for (const auto& person : view_.decision.people) {
             const GradeEntry* entry = standing_grade(view_.decision, row_.id, option_, person.id);
-            if (entry == nullptr)
-                continue;
+            if (entry == nullptr) continue;
             const Grade* given = find_grade(*leaf, entry->grade);
             form.fact(person_name(view_.decision, person.id), given->name.empty() ? given->id : given->name);
-            if (!entry->note.empty())
-                form.sentence(entry->note);
+            if (!entry->note.empty()) form.sentence(entry->note);
         }
     }
 
@@ -236,20 +220,20 @@ private:
         form.sentence(in_play(view_.results, option_)
                           ? "Its worth follows from the comparisons with the other options."
                           : "It takes no part in the comparisons.");
-        if (form.link("detail-weigh", "Compare in Weigh"))
-            actions_.go(RoomId::weigh, row_.id);
+        if (form.link("detail-weigh", "Compare in Weigh")) actions_.go(RoomId::weigh, row_.id);
     }
 
     void state(Form& form) {
-        const auto found = std::find_if(view_.results.musts.begin(), view_.results.musts.end(), [&](const MustResult& r) {
-            return r.requirement == row_.id && r.option == option_;
-        });
-        if (found == view_.results.musts.end())
-            return;
-        const bool out = std::any_of(view_.results.excluded.begin(), view_.results.excluded.end(), [&](const Exclusion& e) {
-            return e.requirement == row_.id && e.option == option_;
-        });
-        form.fact("Stands as", must_words(found->state) + (out ? ", excluded by it" : ""), must_tone(found->state));
+        const auto found =
+            std::find_if(view_.results.musts.begin(), view_.results.musts.end(), [&](const MustResult& r) {
+                return r.requirement == row_.id && r.option == option_;
+            });
+        if (found == view_.results.musts.end()) return;
+        const bool out =
+            std::any_of(view_.results.excluded.begin(), view_.results.excluded.end(),
+                        [&](const Exclusion& e) { return e.requirement == row_.id && e.option == option_; });
+        form.fact("Stands as", must_words(found->state) + (out ? ", excluded by it" : ""),
+                  must_tone(found->state));
         if (found->state == MustState::undecided)
             form.sentence("The range reaches over the limit.", Tone::open);
     }
@@ -258,8 +242,8 @@ private:
         const Requirement* must = find_requirement(view_.decision, row_.id);
         state(form);
         Check entry = check_to_change(view_.decision, row_.id, option_, view_.person);
-        const std::string value_label = must->unit.empty() ? "Value" : "Value, " + must->unit;
-        const auto value = form.number("check-value", value_label, name("Value"), entry.value, 0, 3);
+        const auto value =
+            form.number("check-value", value_label(must->unit), name("Value"), entry.value, 0, 3);
         const auto low = form.number("check-low", "Low", name("Low end"), entry.low, 1, 3);
         const auto high = form.number("check-high", "High", name("High end"), entry.high, 2, 3);
         const auto source = form.text("check-source", "Source", name("Source"), entry.source);
@@ -275,13 +259,14 @@ private:
     void must_yes_no(Form& form) {
         const Answers answers = answers_of(view_, row_, option_);
         const std::size_t none = answers.labels.size() - 1;
-        if (const auto answer = form.pick("check-state", "State", name("State"), answers.labels, answers.standing.value_or(none)))
+        if (const auto answer = form.pick("check-state", "State", name("State"), answers.labels,
+                                          answers.standing.value_or(none)))
             enter_answer(view_, actions_, row_, option_, *answer);
         Check entry = check_to_change(view_.decision, row_.id, option_, view_.person);
-        bool changed = take(form.text("check-source", "Evidence", name("Evidence"), entry.source), entry.source);
+        bool changed =
+            take(form.text("check-source", "Evidence", name("Evidence"), entry.source), entry.source);
         changed = take(form.text("check-note", "Note", name("Note"), entry.note), entry.note) || changed;
-        if (changed)
-            actions_.edit(Enter<Check>{std::move(entry)});
+        if (changed) actions_.edit(Enter<Check>{std::move(entry)});
         state(form);
         checked_by(form);
     }
@@ -296,8 +281,7 @@ private:
         const Requirement* must = find_requirement(view_.decision, row_.id);
         state(form);
         form.sentence("Read from the figures of " + node_name(view_.decision, must->criterion) + ".");
-        if (form.link("must-figure", "Go to that figure"))
-            actions_.go(RoomId::gauge, must->criterion);
+        if (form.link("must-figure", "Go to that figure")) actions_.go(RoomId::gauge, must->criterion);
     }
 
     void must_node(Form& form) {
@@ -318,7 +302,8 @@ private:
 
 } // namespace
 
-void draw_detail_card(Ui& ui, const RoomView& view, Actions& actions, const Row& row, std::size_t option, Box box) {
+void draw_detail_card(Ui& ui, const RoomView& view, Actions& actions, const Row& row, std::size_t option,
+                      Box box) {
     DetailCard(ui, view, actions, row, option).draw(box);
 }
 

@@ -19,13 +19,11 @@ struct Ends {
 };
 
 std::optional<Ends> ends_of(const Curve& curve) {
-    if (const auto* line = std::get_if<LineCurve>(&curve.shape))
-        return Ends{line->worst, line->best};
+    if (const auto* line = std::get_if<LineCurve>(&curve.shape)) return Ends{line->worst, line->best};
     if (const auto* points = std::get_if<PointsCurve>(&curve.shape)) {
         const auto by_worth = [](const auto& a, const auto& b) { return a[1] < b[1]; };
         const auto [low, high] = std::minmax_element(points->at.begin(), points->at.end(), by_worth);
-        if ((*low)[0] != (*high)[0])
-            return Ends{(*low)[0], (*high)[0]};
+        if ((*low)[0] != (*high)[0]) return Ends{(*low)[0], (*high)[0]};
     }
     if (const auto* target = std::get_if<TargetCurve>(&curve.shape))
         return Ends{target->target + target->tolerance, target->target};
@@ -56,9 +54,9 @@ std::vector<const Figure*> superseded(const std::vector<const Figure*>& of_place
     std::vector<const Figure*> earlier;
     const Figure* later = nullptr;
     for (auto figure = of_place.rbegin(); figure != of_place.rend(); ++figure) {
-        const bool another = later == nullptr || (*figure)->value != later->value || (*figure)->round != later->round;
-        if (later != nullptr && another && (*figure)->value)
-            earlier.push_back(*figure);
+        const bool another =
+            later == nullptr || (*figure)->value != later->value || (*figure)->round != later->round;
+        if (later != nullptr && another && (*figure)->value) earlier.push_back(*figure);
         later = *figure;
     }
     return earlier;
@@ -67,8 +65,7 @@ std::vector<const Figure*> superseded(const std::vector<const Figure*>& of_place
 std::vector<const Figure*> superseded(const Decision& decision, const Id& criterion, const Id& option) {
     std::vector<const Figure*> of_place;
     for (const auto& figure : decision.figures) {
-        if (figure.criterion == criterion && figure.option == option)
-            of_place.push_back(&figure);
+        if (figure.criterion == criterion && figure.option == option) of_place.push_back(&figure);
     }
     return superseded(of_place);
 }
@@ -106,20 +103,15 @@ GradeEntry grade_to_change(const Decision& decision, const Id& criterion, const 
 
 std::string range_problem(const std::optional<double>& low, const std::optional<double>& value,
                           const std::optional<double>& high) {
-    if (low && value && *low > *value)
-        return "The low end cannot be above the value.";
-    if (value && high && *value > *high)
-        return "The high end cannot be below the value.";
-    if (low && high && *low > *high)
-        return "The low end cannot be above the high end.";
+    if (low && value && *low > *value) return "The low end cannot be above the value.";
+    if (value && high && *value > *high) return "The high end cannot be below the value.";
+    if (low && high && *low > *high) return "The low end cannot be above the high end.";
     return {};
 }
 
 CurveKind kind_of(const Curve& curve) {
-    if (std::holds_alternative<ProportionalCurve>(curve.shape))
-        return CurveKind::proportional;
-    if (std::holds_alternative<PointsCurve>(curve.shape))
-        return CurveKind::points;
+    if (std::holds_alternative<ProportionalCurve>(curve.shape)) return CurveKind::proportional;
+    if (std::holds_alternative<PointsCurve>(curve.shape)) return CurveKind::points;
     return std::holds_alternative<TargetCurve>(curve.shape) ? CurveKind::target : CurveKind::line;
 }
 
@@ -128,14 +120,12 @@ std::vector<double> known_figures(const Decision& decision, const Node& leaf,
     std::vector<double> figures;
     if (leaf.cost_sheet) {
         if (computed != nullptr) {
-            for (const auto& [option, value] : *computed)
-                figures.push_back(value);
+            for (const auto& [option, value] : *computed) figures.push_back(value);
         }
     } else {
         for (const auto& option : decision.options) {
             const Figure* figure = standing_figure(decision, leaf.id, option.id);
-            if (figure != nullptr && figure->value)
-                figures.push_back(*figure->value);
+            if (figure != nullptr && figure->value) figures.push_back(*figure->value);
         }
     }
     std::sort(figures.begin(), figures.end());
@@ -144,8 +134,7 @@ std::vector<double> known_figures(const Decision& decision, const Node& leaf,
 }
 
 std::optional<Curve> suggested_line(const std::vector<double>& figures, Better better) {
-    if (figures.size() < 2)
-        return std::nullopt;
+    if (figures.size() < 2) return std::nullopt;
     return better == Better::less ? Curve{LineCurve{figures.back(), figures.front()}}
                                   : Curve{LineCurve{figures.front(), figures.back()}};
 }
@@ -157,23 +146,21 @@ bool less_is_better(const Curve& curve) {
     return ends && ends->best < ends->worst;
 }
 
-std::optional<Curve> as_kind(CurveKind kind, const std::optional<Curve>& now, const std::vector<double>& figures) {
+std::optional<Curve> as_kind(CurveKind kind, const std::optional<Curve>& now,
+                             const std::vector<double>& figures) {
     const Better better = now && less_is_better(*now) ? Better::less : Better::more;
-    if (kind == CurveKind::proportional)
-        return Curve{ProportionalCurve{better}};
+    if (kind == CurveKind::proportional) return Curve{ProportionalCurve{better}};
     std::optional<Ends> ends = now ? ends_of(*now) : std::nullopt;
     if (!ends) {
         const auto line = suggested_line(figures, better);
-        if (!line)
-            return std::nullopt;
+        if (!line) return std::nullopt;
         ends = ends_of(*line);
     }
     const auto [worst, best] = *ends;
-    if (kind == CurveKind::line)
-        return Curve{LineCurve{worst, best}};
-    if (kind == CurveKind::target)
-        return Curve{TargetCurve{best, std::abs(best - worst)}};
-    return worst < best ? Curve{PointsCurve{{{worst, 0}, {best, 1}}}} : Curve{PointsCurve{{{best, 1}, {worst, 0}}}};
+    if (kind == CurveKind::line) return Curve{LineCurve{worst, best}};
+    if (kind == CurveKind::target) return Curve{TargetCurve{best, std::abs(best - worst)}};
+    return worst < best ? Curve{PointsCurve{{{worst, 0}, {best, 1}}}}
+                        : Curve{PointsCurve{{{best, 1}, {worst, 0}}}};
 }
 
 } // namespace steelyard::gauge

@@ -16,13 +16,14 @@ const Check* standing_check(const Decision& decision, const Id& requirement, con
 const GradeEntry* standing_grade(const Decision& decision, const Id& criterion, const Id& option,
                                  const Id& by);
 
-/// The quotes that the standing one of a place superseded, latest first. Entries in which only source, status or
-/// the like was put right are told once.
+/// The quotes that the standing one of a place superseded, latest first. Entries in which only source, status
+/// or the like was put right are told once.
 std::vector<const Figure*> superseded(const std::vector<const Figure*>& of_place);
 std::vector<const Figure*> superseded(const Decision& decision, const Id& criterion, const Id& option);
 
-/// A figure newly typed: the value, and the round that was going on. What was said of the figure before (range,
-/// source, status) is not carried over, since nobody said it of this one. No value: the place is open again.
+/// A figure newly typed: the value, and the round that was going on. What was said of the figure before
+/// (range, source, status) is not carried over, since nobody said it of this one. No value: the place is open
+/// again.
 Figure typed_figure(const Decision& decision, const Id& criterion, const Id& option,
                     std::optional<double> value);
 
@@ -47,7 +48,8 @@ std::vector<double> known_figures(const Decision& decision, const Node& leaf,
 std::optional<Curve> suggested_line(const std::vector<double>& figures, Better better);
 
 /// The curve nearest to the present one of another kind. None where neither it nor the figures say enough.
-std::optional<Curve> as_kind(CurveKind kind, const std::optional<Curve>& now, const std::vector<double>& figures);
+std::optional<Curve> as_kind(CurveKind kind, const std::optional<Curve>& now,
+                             const std::vector<double>& figures);
 
 /// True where less of the figure is worth more under this curve.
 bool less_is_better(const Curve& curve);

@@ -42,7 +42,7 @@ struct Row {
     RowKind kind = RowKind::section;
     Id id; ///< The leaf or the must.
     std::string title;
-    Words detail; ///< Unit and curve, or the limit.
+    Words detail;            ///< Unit and curve, or the limit.
     std::vector<Cell> cells; ///< One for each option of the decision; none in a section.
     bool has_ranges = false;
 
@@ -65,6 +65,9 @@ struct Model {
 
 /// The whole table. Computed once for each state of the decision and each person who answers.
 Model make_model(const RoomView& view);
+
+/// "Purchase price of Brook".
+std::string cell_name(const Row& row, const Decision& decision, const Id& option);
 
 /// "none at 90,000, full at 40,000", "less is better", "full at 900, none 200 away".
 std::string curve_words(const Curve& curve);

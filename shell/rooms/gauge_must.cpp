@@ -22,14 +22,12 @@ Plot plot_of(const RoomView& view, const Requirement& must, const Id& option) {
     Plot plot;
     plot.name = requirement_name(view.decision, must.id) + ": " + limit_words(must);
     for (const auto& limit : {must.min_worth, must.at_least, must.at_most}) {
-        if (limit)
-            plot.limits.push_back(*limit);
+        if (limit) plot.limits.push_back(*limit);
     }
     for (std::size_t o = 0; o < view.decision.options.size(); ++o) {
         const Id& id = view.decision.options[o].id;
         const MustResult* result = result_of(view.results, must.id, id);
-        if (result == nullptr || !result->value)
-            continue;
+        if (result == nullptr || !result->value) continue;
         PlotMark mark{.index = o,
                       .figure = *result->value,
                       .in_play = in_play(view.results, id),
@@ -56,8 +54,10 @@ void list_options(Ui& ui, const RoomView& view, const Requirement& must, Form& f
         const MustResult* result = result_of(view.results, must.id, option.id);
         const MustState state = result != nullptr ? result->state : MustState::unchecked;
         option_mark(ui, at.at(), o, in_play(view.results, option.id), 20);
-        const Words words = option.withdrawn ? Words{"withdrawn", Tone::quiet} : Words{must_words(state), must_tone(state)};
-        draw_text(ui, {at.x + 28, at.y + 1}, option_name(view.decision, option.id), {.max_width = at.w - 120});
+        const Words words =
+            option.withdrawn ? Words{"withdrawn", Tone::quiet} : Words{must_words(state), must_tone(state)};
+        draw_text(ui, {at.x + 28, at.y + 1}, option_name(view.decision, option.id),
+                  {.max_width = at.w - 120});
         draw_text(ui, {at.right(), at.y + 1}, words.text,
                   {.font = Font::strong, .ink = ink_of(ui.look(), words.tone), .align = Align::right});
         form.space(26);
@@ -83,17 +83,19 @@ void draw_must_card(Ui& ui, const RoomView& view, Actions& actions, const Requir
         const float height = std::clamp(inside.h - 64, 92.0F, 170.0F);
         draw_plot(ui, plot, {form.rest().x, form.rest().y, form.rest().w, height});
         form.space(height + 6);
-        form.sentence((must.unit.empty() ? limit : limit + " " + must.unit) + "; the limit itself is allowed.");
+        form.sentence((must.unit.empty() ? limit : limit + " " + must.unit) +
+                      "; the limit itself is allowed.");
     }
     if (must.waived) {
-        const std::string by = must.waived->by.empty() ? "" : " by " + person_name(view.decision, must.waived->by);
+        const std::string by =
+            must.waived->by.empty() ? "" : " by " + person_name(view.decision, must.waived->by);
         form.sentence("Waived" + by + (must.waived->why.empty() ? "." : ": " + must.waived->why));
     }
     if (must.safety)
-        form.sentence("For safety's sake: to be decided by licensed people under the codes that hold on site. This "
-                      "program checks no safety.");
-    if (form.link("must-in-frame", "Change the must in Frame"))
-        actions.go(RoomId::frame, must.id);
+        form.sentence(
+            "For safety's sake: to be decided by licensed people under the codes that hold on site. This "
+            "program checks no safety.");
+    if (form.link("must-in-frame", "Change the must in Frame")) actions.go(RoomId::frame, must.id);
     area.reach(form.bottom());
 }
 

@@ -36,11 +36,7 @@ void dotted(ImDrawList& list, ImVec2 from, ImVec2 to, ImU32 colour) {
 class Drawer {
 public:
     Drawer(Ui& ui, const Plot& plot, const Box& box)
-        : ui_(ui),
-          plot_(plot),
-          box_(box),
-          span_(span_of(plot)),
-          list_(*ImGui::GetWindowDrawList()) {
+        : ui_(ui), plot_(plot), box_(box), span_(span_of(plot)), list_(*ImGui::GetWindowDrawList()) {
         left_ = box.x + (plot.worth ? left_margin : 0);
         axis_ = box.bottom() - mark_size - 6 - numbers_height;
         top_ = box.y + 10;
@@ -57,8 +53,7 @@ public:
                           {.font = Font::small, .ink = theme.quiet, .align = Align::right});
         }
         draw_limits();
-        if (plot_.worth)
-            draw_curve();
+        if (plot_.worth) draw_curve();
         draw_marks();
         draw_numbers();
         report();
@@ -66,12 +61,16 @@ public:
 
 private:
     float x_of(double figure) const {
-        return left_ + static_cast<float>((figure - span_.low) / (span_.high - span_.low)) * (box_.right() - left_);
+        return left_ +
+               static_cast<float>((figure - span_.low) / (span_.high - span_.low)) * (box_.right() - left_);
     }
     double figure_at(float x) const {
-        return span_.low + (span_.high - span_.low) * static_cast<double>((x - left_) / (box_.right() - left_));
+        return span_.low +
+               (span_.high - span_.low) * static_cast<double>((x - left_) / (box_.right() - left_));
     }
-    float y_of(double worth) const { return axis_ - static_cast<float>(std::clamp(worth, 0.0, 1.0)) * (axis_ - top_); }
+    float y_of(double worth) const {
+        return axis_ - static_cast<float>(std::clamp(worth, 0.0, 1.0)) * (axis_ - top_);
+    }
 
     ImU32 colour_of(const PlotMark& mark) const {
         return mark.in_play ? option_colour(ui_.look(), mark.index) : ui_.look().quiet;
@@ -80,8 +79,7 @@ private:
     /// The range of the chosen option, as a band.
     void draw_range() {
         for (const auto& mark : plot_.marks) {
-            if (!mark.chosen || (!mark.low && !mark.high))
-                continue;
+            if (!mark.chosen || (!mark.low && !mark.high)) continue;
             const ImU32 colour = colour_of(mark);
             list_.AddRectFilled({x_of(mark.low.value_or(mark.figure)), top_},
                                 {x_of(mark.high.value_or(mark.figure)), axis_}, faded(colour, 36));
@@ -97,31 +95,31 @@ private:
         std::vector<double> at{span_.low, span_.high};
         at.insert(at.end(), plot_.anchors.begin(), plot_.anchors.end());
         if (plot_.anchors.empty()) {
-            for (int i = 1; i < steps; ++i)
-                at.push_back(span_.low + (span_.high - span_.low) * i / steps);
+            for (int i = 1; i < steps; ++i) at.push_back(span_.low + (span_.high - span_.low) * i / steps);
         }
         std::sort(at.begin(), at.end());
         std::vector<ImVec2> line;
         for (const double figure : at) {
-            if (const auto worth = plot_.worth(figure))
-                line.push_back({x_of(figure), y_of(*worth)});
+            if (const auto worth = plot_.worth(figure)) line.push_back({x_of(figure), y_of(*worth)});
         }
         list_.AddPolyline(line.data(), static_cast<int>(line.size()), ui_.look().steel, 0, 2.5F);
         for (const double figure : plot_.anchors) {
             const ImVec2 p{x_of(figure), y_of(plot_.worth(figure).value_or(0))};
-            list_.AddRectFilled({p.x - handle, p.y - handle}, {p.x + handle, p.y + handle}, ui_.look().card, 2);
-            list_.AddRect({p.x - handle, p.y - handle}, {p.x + handle, p.y + handle}, ui_.look().steel, 2, 0, 2);
+            list_.AddRectFilled({p.x - handle, p.y - handle}, {p.x + handle, p.y + handle}, ui_.look().card,
+                                2);
+            list_.AddRect({p.x - handle, p.y - handle}, {p.x + handle, p.y + handle}, ui_.look().steel, 2, 0,
+                          2);
         }
     }
 
     void draw_marks() {
         std::vector<std::size_t> order(plot_.marks.size());
         std::iota(order.begin(), order.end(), std::size_t{0});
-        std::stable_sort(order.begin(), order.end(),
-                         [&](std::size_t a, std::size_t b) { return plot_.marks[a].figure < plot_.marks[b].figure; });
+        std::stable_sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) {
+            return plot_.marks[a].figure < plot_.marks[b].figure;
+        });
         std::vector<float> middles;
-        for (const std::size_t i : order)
-            middles.push_back(x_of(plot_.marks[i].figure));
+        for (const std::size_t i : order) middles.push_back(x_of(plot_.marks[i].figure));
         const auto places = spread(middles, mark_size + 2, box_.x, box_.right());
         for (std::size_t k = 0; k < order.size(); ++k) {
             const PlotMark& mark = plot_.marks[order[k]];
@@ -134,9 +132,9 @@ private:
             } else {
                 list_.AddCircleFilled({x, axis_}, 3.5F, colour);
             }
-            // So many that their letters would cover one another: the dots must do, and the chosen one's letter.
-            if (!places && !mark.chosen)
-                continue;
+            // So many that their letters would cover one another: the dots must do, and the chosen one's
+            // letter.
+            if (!places && !mark.chosen) continue;
             const float middle = places ? (*places)[k] : std::clamp(x, box_.x + 11, box_.right() - 11);
             list_.AddLine({x, axis_}, {middle, axis_ + 5}, colour, 1.5F);
             option_mark(ui_, {middle - mark_size / 2, axis_ + 5}, mark.index, mark.in_play, mark_size);
@@ -146,9 +144,11 @@ private:
     void draw_numbers() {
         std::vector<double> figures = plot_.anchors;
         figures.insert(figures.end(), plot_.limits.begin(), plot_.limits.end());
-        if (figures.empty() && !plot_.marks.empty()) {
-            for (const auto& mark : plot_.marks)
-                figures.push_back(mark.figure);
+        // Anchors and limits were typed and stand as they are; of figures a thousandth of the axis is enough.
+        int decimals = 6;
+        if (figures.empty()) {
+            decimals = std::clamp(static_cast<int>(std::ceil(3 - std::log10(span_.high - span_.low))), 0, 6);
+            for (const auto& mark : plot_.marks) figures.push_back(mark.figure);
         }
         std::sort(figures.begin(), figures.end());
         // The outermost first: where there is no room for all, those between are left out.
@@ -159,16 +159,16 @@ private:
         });
         std::vector<std::pair<float, float>> taken;
         for (const std::size_t i : order) {
-            const std::string text = figure_text(figures[i]);
+            const std::string text = figure_text(figures[i], decimals);
             const float width = text_size(Font::small, text).x;
             const float left = std::clamp(x_of(figures[i]) - width / 2, box_.x, box_.right() - width);
             const bool free = std::none_of(taken.begin(), taken.end(), [&](const auto& other) {
                 return left < other.second + 8 && left + width + 8 > other.first;
             });
-            if (!free)
-                continue;
+            if (!free) continue;
             taken.emplace_back(left, left + width);
-            const bool limit = std::find(plot_.limits.begin(), plot_.limits.end(), figures[i]) != plot_.limits.end();
+            const bool limit =
+                std::find(plot_.limits.begin(), plot_.limits.end(), figures[i]) != plot_.limits.end();
             draw_text(ui_, {left, box_.bottom() - 16}, text,
                       {.font = Font::small, .ink = limit ? ui_.look().red : ui_.look().quiet});
         }
@@ -180,10 +180,10 @@ private:
         item.label = plot_.name;
         item.role = "img";
         for (const auto& mark : plot_.marks) {
-            item.value += (item.value.empty() ? "" : "; ") + option_letter(mark.index) + " at " + figure_text(mark.figure);
+            item.value += (item.value.empty() ? "" : "; ") + option_letter(mark.index) + " at " +
+                          figure_text(mark.figure);
             const auto worth = plot_.worth ? plot_.worth(mark.figure) : std::nullopt;
-            if (worth)
-                item.value += " is worth " + figure_text(*worth, 2);
+            if (worth) item.value += " is worth " + figure_text(*worth, 2);
         }
         item.at = box_.at();
         item.size = {box_.w, box_.h};
@@ -211,23 +211,20 @@ Span span_of(const Plot& plot) {
         figures.push_back(mark.low.value_or(mark.figure));
         figures.push_back(mark.high.value_or(mark.figure));
     }
-    if (figures.empty())
-        return {};
+    if (figures.empty()) return {};
     const auto [low, high] = std::minmax_element(figures.begin(), figures.end());
     const double size = std::max(std::abs(*low), std::abs(*high));
     // A twelfth beside it on either side; where all figures are one, a tenth of it.
     double room = (*high - *low) / 12;
-    if (room <= 1e-9 * size)
-        room = size > 0 ? size / 10 : 1;
+    if (room <= 1e-9 * size) room = size > 0 ? size / 10 : 1;
     Span span{*low - room, *high + room};
-    if (*low >= 0 && span.low < 0)
-        span.low = 0;
+    if (*low >= 0 && span.low < 0) span.low = 0;
     return span;
 }
 
-std::optional<std::vector<float>> spread(const std::vector<float>& wanted, float width, float left, float right) {
-    if (width * static_cast<float>(wanted.size()) > right - left)
-        return std::nullopt;
+std::optional<std::vector<float>> spread(const std::vector<float>& wanted, float width, float left,
+                                         float right) {
+    if (width * static_cast<float>(wanted.size()) > right - left) return std::nullopt;
     std::vector<float> at = wanted;
     float free = left;
     for (float& middle : at) {

@@ -21,10 +21,11 @@ struct PlotMark {
 
 /// A figure with the options that have it, and what it is worth.
 struct Plot {
-    std::string name;                              ///< For the ledger: what the picture shows, in words.
-    std::function<std::optional<double>(double)> worth; ///< 0 to 1; none where a figure has none. Empty: an axis only.
-    std::vector<double> anchors;                   ///< Where the curve bends; handles stand there.
-    std::vector<double> limits;                    ///< Limits of a must, drawn across.
+    std::string name; ///< For the ledger: what the picture shows, in words.
+    std::function<std::optional<double>(double)>
+        worth;                   ///< 0 to 1; none where a figure has none. Empty: an axis only.
+    std::vector<double> anchors; ///< Where the curve bends; handles stand there.
+    std::vector<double> limits;  ///< Limits of a must, drawn across.
     std::vector<PlotMark> marks;
 };
 
@@ -35,9 +36,10 @@ struct Span {
 };
 Span span_of(const Plot& plot);
 
-/// Where marks of a width are put along a line so that none covers another and each is near where it belongs, in the same
-/// order as `wanted` (middles). None where they do not fit.
-std::optional<std::vector<float>> spread(const std::vector<float>& wanted, float width, float left, float right);
+/// Where marks of a width are put along a line so that none covers another and each is near where it belongs,
+/// in the same order as `wanted` (middles). None where they do not fit.
+std::optional<std::vector<float>> spread(const std::vector<float>& wanted, float width, float left,
+                                         float right);
 
 void draw_plot(Ui& ui, const Plot& plot, const Box& box);
 

@@ -3,7 +3,6 @@
 #include <imgui.h>
 
 #include <algorithm>
-#include <array>
 #include <cmath>
 
 #include "core/decision/lookup.hpp"
@@ -19,32 +18,15 @@ namespace {
 constexpr float header_height = 44;
 constexpr float section_height = 26;
 constexpr float row_height = 50;
-constexpr float line_more = 15; ///< What a row grows by when a cell of it has a third line.
 constexpr float narrowest_head = 190;
 constexpr float widest_head = 330;
 constexpr float narrowest_column = 124;
 constexpr float padding = 16;
 
-/// A text that is too long for one line, broken between two words.
-std::array<std::string, 2> two_lines(Font font, const std::string& text, float width) {
-    if (text_size(font, text).x <= width)
-        return {text, {}};
-    for (std::size_t space = text.rfind(' '); space != std::string::npos && space > 0; space = text.rfind(' ', space - 1)) {
-        if (text_size(font, std::string_view(text).substr(0, space)).x <= width)
-            return {text.substr(0, space), text.substr(space + 1)};
-    }
-    return {text, {}};
-}
-
 class Table {
 public:
     Table(Ui& ui, const RoomView& view, Actions& actions, const Model& model, TableState& state)
-        : ui_(ui),
-          view_(view),
-          actions_(actions),
-          model_(model),
-          state_(state),
-          theme_(ui.look()) {}
+        : ui_(ui), view_(view), actions_(actions), model_(model), state_(state), theme_(ui.look()) {}
 
     void draw(Box box) {
         const Card card(ui_, box);
@@ -75,7 +57,8 @@ private:
         float y = header_height;
         for (const auto& row : model_.rows) {
             tops_.push_back(y);
-            y += row.kind == RowKind::section ? section_height : row_height + (three_lines(row) ? line_more : 0);
+            y += row.kind == RowKind::section ? section_height
+                                              : row_height + (three_lines(row) ? third_line : 0);
         }
         tops_.push_back(y);
     }
@@ -86,9 +69,10 @@ private:
     float head_text_width() const { return head_ - padding - 10; }
 
     bool three_lines(const Row& row) const {
-        const bool long_answer = row.picked() && std::any_of(row.cells.begin(), row.cells.end(), [&](const Cell& cell) {
-                                     return text_size(Font::strong, cell.main.text).x > text_width();
-                                 });
+        const bool long_answer =
+            row.picked() && std::any_of(row.cells.begin(), row.cells.end(), [&](const Cell& cell) {
+                return text_size(Font::strong, cell.main.text).x > text_width();
+            });
         return row.has_ranges || long_answer || text_size(Font::body, row.title).x > head_text_width();
     }
 
@@ -97,8 +81,9 @@ private:
     bool in_sight(std::size_t row) const {
         return top(row) < sight_.bottom() && top(row) + height(row) > sight_.y + header_height;
     }
-    Box cell_box(const Chosen& at) const {
-        return {origin_.x + head_ + column_ * static_cast<float>(at.option), top(at.row), column_, height(at.row)};
+    Box cell_box(const Place& at) const {
+        return {origin_.x + head_ + column_ * static_cast<float>(at.option), top(at.row), column_,
+                height(at.row)};
     }
     Box body() const {
         return {sight_.x + head_, sight_.y + header_height, sight_.w - head_, sight_.h - header_height};
@@ -109,8 +94,7 @@ private:
     void draw_bands() {
         clip({sight_.x, sight_.y + header_height, sight_.w, sight_.h});
         for (std::size_t r = 0; r < model_.rows.size(); ++r) {
-            if (!in_sight(r))
-                continue;
+            if (!in_sight(r)) continue;
             const float y = top(r);
             if (model_.rows[r].kind == RowKind::section) {
                 ImGui::GetWindowDrawList()->AddRectFilled({sight_.x, y}, {sight_.right(), y + section_height},
@@ -126,7 +110,7 @@ private:
         ImGui::PopClipRect();
     }
 
-    void draw_cells(const std::optional<Chosen>& now) {
+    void draw_cells(const std::optional<Place>& now) {
         clip(body());
         const bool choices_were_asked = state_.open_choices;
         if (now && state_.editing)
@@ -141,8 +125,7 @@ private:
         state_.take_keyboard = false;
         const auto under = input.hovered ? at(*input.hovered) : std::nullopt;
         for (std::size_t r = 0; r < model_.rows.size(); ++r) {
-            if (model_.rows[r].cells.empty() || !in_sight(r))
-                continue;
+            if (model_.rows[r].cells.empty() || !in_sight(r)) continue;
             for (std::size_t o = 0; o < columns(); ++o)
                 draw_cell({r, o}, now && now->row == r && now->option == o,
                           under && under->row == r && under->option == o, input.focused);
@@ -151,26 +134,31 @@ private:
         ImGui::PopClipRect();
     }
 
-    void draw_cell(const Chosen& where, bool is_chosen, bool hovered, bool focused) {
+    void draw_cell(const Place& where, bool is_chosen, bool hovered, bool focused) {
         const Box box = cell_box(where);
-        if (box.right() < sight_.x + head_ || box.x > sight_.right())
-            return;
+        if (box.right() < sight_.x + head_ || box.x > sight_.right()) return;
         const Row& row = model_.rows[where.row];
         const Cell& cell = row.cells[where.option];
         const Option& option = view_.decision.options[where.option];
         const Box frame{box.x + 3, box.y + 3, box.w - 6, box.h - 7};
         ImDrawList* list = ImGui::GetWindowDrawList();
         const ImU32 ground = is_chosen ? theme_.brass_wash : cell.open ? theme_.paper : theme_.card;
-        if (is_chosen || cell.open) {
+        const bool edited = is_chosen && state_.editing; // Its field is drawn already.
+        if (!edited && (is_chosen || cell.open)) {
             list->AddRectFilled(frame.at(), frame.end(), ground, 5);
             list->AddRect(frame.at(), frame.end(), theme_.brass, 5, 0, is_chosen ? 2.0F : 1.0F);
         }
-        if (hovered && !is_chosen)
-            list->AddRectFilled(frame.at(), frame.end(), theme_.hover, 5);
-        if (!(is_chosen && state_.editing))
-            draw_cell_text(frame, row, cell, is_chosen, ground, !model_.columns[where.option].out.empty());
-        if (is_chosen && focused && ui_.keyboard_used)
-            cell_ring(ui_, frame);
+        if (hovered && !is_chosen) list->AddRectFilled(frame.at(), frame.end(), theme_.hover, 5);
+        if (!edited) {
+            const OnPaper paper(ui_, ground);
+            draw_cell_text(ui_, cell,
+                           {.frame = frame,
+                            .width = text_width(),
+                            .strong = is_chosen,
+                            .greyed = !model_.columns[where.option].out.empty(),
+                            .two_lines = row.picked()});
+        }
+        if (!edited && is_chosen && focused && ui_.keyboard_used) cell_ring(ui_, frame);
 
         LedgerItem item;
         item.id = cell_id(row, option.id);
@@ -178,8 +166,7 @@ private:
         item.role = "gridcell";
         item.value = cell.main.text;
         for (const std::string* more : {&cell.change, &cell.range, &cell.small.text}) {
-            if (!more->empty())
-                item.value += ", " + *more;
+            if (!more->empty()) item.value += ", " + *more;
         }
         item.at = box.at();
         item.size = {box.w, box.h};
@@ -189,42 +176,11 @@ private:
         ui_.ledger.add(std::move(item));
     }
 
-    void draw_cell_text(const Box& frame, const Row& row, const Cell& cell, bool is_chosen, ImU32 ground, bool out) {
-        const OnPaper paper(ui_, ground);
-        const float x = frame.x + 8;
-        const float width = text_width();
-        const bool strong = is_chosen || cell.main.tone != Tone::plain;
-        const TextLook main{.font = strong ? Font::strong : Font::body,
-                            .ink = out && cell.main.tone == Tone::plain ? theme_.quiet : ink_of(theme_, cell.main.tone),
-                            .max_width = width};
-        const auto lines = row.picked() ? two_lines(main.font, cell.main.text, width)
-                                        : std::array<std::string, 2>{cell.main.text, {}};
-        const float line = font_size(Font::body);
-        float y = frame.y + (frame.h - line - (lines[1].empty() ? 0 : line - 1) - (cell.range.empty() ? 0 : line_more) -
-                             (cell.small.text.empty() ? 0 : line_more + 1)) / 2;
-        const ImVec2 first = draw_text(ui_, {x, y}, lines[0], main);
-        const TextLook small{.font = Font::small, .ink = theme_.quiet, .max_width = width};
-        if (first.x + 8 + text_size(Font::small, cell.change).x <= width)
-            draw_text(ui_, {x + first.x + 8, y + 3}, cell.change, small);
-        y += line + 1;
-        if (!lines[1].empty()) {
-            draw_text(ui_, {x, y - 2}, lines[1], main);
-            y += line - 1;
-        }
-        if (!cell.range.empty()) {
-            draw_text(ui_, {x, y}, cell.range, small);
-            y += line_more;
-        }
-        draw_text(ui_, {x, y}, cell.small.text,
-                  {.font = Font::small, .ink = ink_of(theme_, cell.small.tone), .max_width = width});
-    }
-
     void draw_heads() {
         clip({sight_.x, sight_.y + header_height, head_, sight_.h});
         for (std::size_t r = 0; r < model_.rows.size(); ++r) {
             const Row& row = model_.rows[r];
-            if (row.kind == RowKind::section || !in_sight(r))
-                continue;
+            if (row.kind == RowKind::section || !in_sight(r)) continue;
             const Box box{sight_.x, top(r), head_, height(r)};
             if (press_area(ui_, (row.is_must() ? "must-row/" : "row/") + row.id, row.title,
                            {box.x + 3, box.y + 3, box.w - 6, box.h - 7}, "rowheader", row.detail.text)) {
@@ -233,7 +189,7 @@ private:
             const float width = head_text_width();
             const float line = font_size(Font::body);
             const auto lines = two_lines(Font::body, row.title, width);
-            float y = box.y + (box.h - line - line_more - (lines[1].empty() ? 0 : line)) / 2 - 1;
+            float y = box.y + (box.h - line - third_line - (lines[1].empty() ? 0 : line)) / 2 - 1;
             for (const auto& text : lines) {
                 draw_text(ui_, {box.x + padding, y}, text, {.max_width = width});
                 y += text.empty() ? 0 : line;
@@ -247,16 +203,17 @@ private:
     void draw_header() {
         clip({sight_.x + head_, sight_.y, sight_.w - head_, header_height});
         for (std::size_t o = 0; o < columns(); ++o) {
-            const Box box{origin_.x + head_ + column_ * static_cast<float>(o), sight_.y, column_, header_height};
-            if (box.right() < sight_.x + head_ || box.x > sight_.right())
-                continue;
+            const Box box{origin_.x + head_ + column_ * static_cast<float>(o), sight_.y, column_,
+                          header_height};
+            if (box.right() < sight_.x + head_ || box.x > sight_.right()) continue;
             const std::string& out = model_.columns[o].out;
             option_mark(ui_, {box.x + 12, box.y + 12}, o, out.empty());
             const float x = box.x + 12 + 22 + 8;
             const float width = box.right() - x - 4;
             const float y = out.empty() ? box.y + 13 : box.y + 6;
-            draw_text(ui_, {x, y}, option_name(view_.decision, view_.decision.options[o].id),
-                      {.font = Font::strong, .ink = out.empty() ? theme_.ink : theme_.quiet, .max_width = width});
+            draw_text(
+                ui_, {x, y}, option_name(view_.decision, view_.decision.options[o].id),
+                {.font = Font::strong, .ink = out.empty() ? theme_.ink : theme_.quiet, .max_width = width});
             draw_text(ui_, {x, y + font_size(Font::strong)}, out,
                       {.font = Font::small, .ink = theme_.quiet, .max_width = width});
         }
@@ -264,13 +221,12 @@ private:
         rule(ui_, sight_.x, sight_.y + header_height - 1, sight_.w);
     }
 
-    void draw_editor(const Chosen& now) {
+    void draw_editor(const Place& now) {
         const Row& row = model_.rows[now.row];
         const Box box = cell_box(now);
         const CellLeft left = cell_editor(ui_, state_.edit, cell_name(row, view_.decision, state_.option),
                                           {box.x + 3, box.y + 3, box.w - 6, box.h - 7});
-        if (left == CellLeft::not_yet)
-            return;
+        if (left == CellLeft::not_yet) return;
         if (left != CellLeft::cancelled) {
             const auto problem = enter_text(view_, actions_, row, state_.option, state_.edit.text);
             if (problem) {
@@ -287,12 +243,12 @@ private:
         state_.editing = false;
         state_.take_keyboard = left != CellLeft::away;
         if (left == CellLeft::down || left == CellLeft::up)
-            move(now, 0, left == CellLeft::down ? 1 : -1);
+            choose_cell(moved(model_, now, 0, left == CellLeft::down ? 1 : -1));
         if (left == CellLeft::right || left == CellLeft::left)
-            move_on(now, left == CellLeft::right ? 1 : -1);
+            choose_cell(moved_on(model_, now, left == CellLeft::right ? 1 : -1));
     }
 
-    void draw_choices(const Chosen& now) {
+    void draw_choices(const Place& now) {
         const Row& row = model_.rows[now.row];
         const Answers answers = answers_of(view_, row, state_.option);
         const auto picked = cell_choices(ui_, "answers/" + cell_id(row, state_.option), answers.labels,
@@ -303,45 +259,43 @@ private:
         }
     }
 
-    std::optional<Chosen> at(ImVec2 point) const {
+    std::optional<Place> at(ImVec2 point) const {
         const float x = point.x - origin_.x - head_;
-        if (x < 0 || columns() == 0)
-            return std::nullopt;
+        if (x < 0 || columns() == 0) return std::nullopt;
         const auto option = static_cast<std::size_t>(x / column_);
         for (std::size_t r = 0; r < model_.rows.size(); ++r) {
-            if (model_.rows[r].cells.empty() || point.y < top(r) || point.y >= top(r) + height(r))
-                continue;
-            return option < columns() ? std::optional<Chosen>({r, option}) : std::nullopt;
+            if (model_.rows[r].cells.empty() || point.y < top(r) || point.y >= top(r) + height(r)) continue;
+            return option < columns() ? std::optional<Place>({r, option}) : std::nullopt;
         }
         return std::nullopt;
     }
 
-    void act(const GridInput& input, const std::optional<Chosen>& now) {
+    void act(const GridInput& input, const std::optional<Place>& now) {
         if (input.pressed) {
             const auto pressed = at(*input.pressed);
             const auto began = at(input.began);
-            if (pressed && began && pressed->row == began->row && pressed->option == began->option) {
-                const bool again = now && now->row == pressed->row && now->option == pressed->option;
-                choose(*pressed);
-                if (again && !state_.editing)
-                    begin(*pressed, {}, false);
+            if (pressed && pressed == began) {
+                // The press that brings the keyboard back to the table opens nothing.
+                const bool again = now == pressed && state_.had_keyboard;
+                choose_cell(*pressed);
+                if (again && !state_.editing) begin(*pressed, {}, false);
             }
             return;
         }
-        if (!input.focused || state_.editing)
-            return;
+        if (!ImGui::IsMouseDown(ImGuiMouseButton_Left)) state_.had_keyboard = input.focused;
+        if (!input.focused || state_.editing) return;
         if (!now) {
-            if (input.right != 0 || input.down != 0 || input.edit)
-                choose_first();
+            if (const auto row = first_row(model_);
+                row && (input.right != 0 || input.down != 0 || input.edit))
+                choose_cell({*row, 0});
             return;
         }
         if (input.right != 0 || input.down != 0) {
-            move(*now, input.right, input.down);
-        } else if (input.row_start || input.row_end) {
-            choose({now->row, input.row_start ? 0 : columns() - 1});
+            choose_cell(moved(model_, *now, input.right, input.down));
         } else if (input.copy) {
             const Row& row = model_.rows[now->row];
-            actions_.copy(row.typed() ? typed_text(view_, row, state_.option) : row.cells[now->option].main.text);
+            actions_.copy(row.typed() ? typed_text(view_, row, state_.option)
+                                      : row.cells[now->option].main.text);
         } else if (input.edit) {
             begin(*now, {}, true);
         } else if (input.clear && !view_.read_only) {
@@ -351,7 +305,7 @@ private:
         }
     }
 
-    void type(const Chosen& now, const GridInput& input) {
+    void type(const Place& now, const GridInput& input) {
         const Row& row = model_.rows[now.row];
         if (row.typed()) {
             begin(now, input.typed, true);
@@ -363,8 +317,9 @@ private:
         }
     }
 
-    /// Opens a cell: its field, its list of answers, or the place its value comes from. `text`: typed onto it.
-    void begin(const Chosen& now, const std::string& text, bool by_keys) {
+    /// Opens a cell: its field, its list of answers, or the place its value comes from. `text`: typed onto
+    /// it.
+    void begin(const Place& now, const std::string& text, bool by_keys) {
         const Row& row = model_.rows[now.row];
         if (row.kind == RowKind::pairs) {
             actions_.go(RoomId::weigh, row.id);
@@ -385,52 +340,7 @@ private:
         }
     }
 
-    void choose(const Chosen& to) {
-        state_.must = model_.rows[to.row].is_must();
-        state_.row = model_.rows[to.row].id;
-        state_.option = view_.decision.options[to.option].id;
-        state_.reveal = true;
-    }
-
-    void choose_first() {
-        for (std::size_t r = 0; r < model_.rows.size(); ++r) {
-            if (!model_.rows[r].cells.empty()) {
-                choose({r, 0});
-                return;
-            }
-        }
-    }
-
-    /// Goes over section heads; stops at the edges.
-    void move(Chosen from, int right, int down) {
-        const int last = static_cast<int>(columns()) - 1;
-        from.option = static_cast<std::size_t>(std::clamp(static_cast<int>(from.option) + right, 0, last));
-        const int step = down < 0 ? -1 : 1;
-        int row = static_cast<int>(from.row);
-        for (int left = std::abs(down); left > 0; --left) {
-            int next = row + step;
-            while (next >= 0 && next < static_cast<int>(model_.rows.size()) &&
-                   model_.rows[static_cast<std::size_t>(next)].cells.empty())
-                next += step;
-            if (next < 0 || next >= static_cast<int>(model_.rows.size()))
-                break;
-            row = next;
-        }
-        from.row = static_cast<std::size_t>(row);
-        choose(from);
-    }
-
-    /// To the next or the last cell, from the end of a row to the next row.
-    void move_on(const Chosen& from, int step) {
-        const int option = static_cast<int>(from.option) + step;
-        if (option >= 0 && option < static_cast<int>(columns())) {
-            move(from, step, 0);
-        } else {
-            move(from, step > 0 ? -all_columns : all_columns, step);
-        }
-    }
-
-    static constexpr int all_columns = 1 << 20;
+    void choose_cell(const Place& to) { choose(model_, view_.decision, state_, to); }
 
     static std::string cell_id(const Row& row, const Id& option) {
         return (row.is_must() ? "must/" : "cell/") + row.id + "/" + option;
@@ -451,44 +361,8 @@ private:
 
 } // namespace
 
-std::string cell_name(const Row& row, const Decision& decision, const Id& option) {
-    return row.title + " of " + option_name(decision, option);
-}
-
-std::optional<Chosen> chosen(const Model& model, const Decision& decision, const TableState& state) {
-    const auto row = std::find_if(model.rows.begin(), model.rows.end(), [&](const Row& r) {
-        return !r.cells.empty() && r.is_must() == state.must && r.id == state.row;
-    });
-    const auto option = std::find_if(decision.options.begin(), decision.options.end(),
-                                     [&](const Option& o) { return o.id == state.option; });
-    if (row == model.rows.end() || option == decision.options.end())
-        return std::nullopt;
-    return Chosen{static_cast<std::size_t>(row - model.rows.begin()),
-                  static_cast<std::size_t>(option - decision.options.begin())};
-}
-
-bool choose_row(const Model& model, const Decision& decision, TableState& state, const Id& id, bool must) {
-    const auto row = std::find_if(model.rows.begin(), model.rows.end(), [&](const Row& r) {
-        return !r.cells.empty() && r.is_must() == must && r.id == id;
-    });
-    if (row == model.rows.end())
-        return false;
-    const auto open = std::find_if(row->cells.begin(), row->cells.end(), [](const Cell& cell) { return cell.open; });
-    const bool known = std::any_of(decision.options.begin(), decision.options.end(),
-                                   [&](const Option& o) { return o.id == state.option; });
-    state.must = must;
-    state.row = id;
-    if (open != row->cells.end()) {
-        state.option = decision.options[static_cast<std::size_t>(open - row->cells.begin())].id;
-    } else if (!known) {
-        state.option = decision.options.front().id;
-    }
-    state.take_keyboard = true;
-    state.reveal = true;
-    return true;
-}
-
-void draw_table(Ui& ui, const RoomView& view, Actions& actions, const Model& model, TableState& state, Box box) {
+void draw_table(Ui& ui, const RoomView& view, Actions& actions, const Model& model, TableState& state,
+                Box box) {
     Table(ui, view, actions, model, state).draw(box);
 }
 

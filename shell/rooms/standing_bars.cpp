@@ -1,7 +1,9 @@
 #include "shell/rooms/standing_bars.hpp"
 
 #include <algorithm>
+#include <array>
 #include <numeric>
+#include <optional>
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/growing_card.hpp"
@@ -16,7 +18,7 @@ namespace {
 constexpr float bar_height = 30;
 constexpr float row_step = 46;
 constexpr float mark_size = 22;
-constexpr float rank_width = 22;
+constexpr float rank_width = 26;
 constexpr float points_width = 92;
 constexpr float share_width = 60;
 constexpr float legend_height = 26;
@@ -238,15 +240,16 @@ private:
     float draw_legend(std::size_t option, float y) {
         bool fits = true;
         for (const auto& part : parts_) {
-            const float needs = text_size(Font::small, legend_text(part)).x + 10;
+            const float needs = text_size(Font::small, legend_text(part)).x + 4;
             fits = fits && needs <= length(part.result->contribution[option]);
         }
         if (fits) {
             float x = bar_x_;
             for (std::size_t p = 0; p < parts_.size(); ++p) {
-                const float width = text_size(Font::small, legend_text(parts_[p])).x + 8;
+                const float above = length(parts_[p].result->contribution[option]);
+                const float width = std::min(above, text_size(Font::small, legend_text(parts_[p])).x + 8);
                 draw_name(p, {x, y, std::max(24.0f, width), legend_height}, false);
-                x += length(parts_[p].result->contribution[option]);
+                x += above;
             }
             return legend_height - 6;
         }

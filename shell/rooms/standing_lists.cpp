@@ -64,9 +64,10 @@ float draw_provisional(Ui& ui, const RoomView& view, ImVec2 at, float width) {
     const Theme& theme = ui.look();
     GrowingCard card(ui, at, width, theme.brass_wash, theme.brass);
     float y = at.y + 14;
-    draw_text(ui, {card.left(), y}, "Provisional: this ranking rests on answers that are still missing.",
-              {.font = Font::strong, .ink = theme.brass_ink, .max_width = card.width()});
-    y += line_step(Font::strong) + line_gap;
+    y += draw_paragraph(ui, {card.left(), y}, card.width(),
+                        "Provisional: this ranking rests on answers that are still missing.",
+                        {.font = Font::strong, .ink = theme.brass_ink}) +
+         line_gap;
     const auto say = [&](const std::string& sentence) {
         y += draw_paragraph(ui, {card.left(), y}, card.width(), sentence) + line_gap;
     };

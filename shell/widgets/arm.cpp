@@ -250,6 +250,7 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
     item.size = {box.w, box.h};
     item.enabled = state.enabled;
     item.focused = item_focused;
+    item.may_scroll = ui.scrolling;
     ui.ledger.add(item);
     // The poise itself, where a hand takes it.
     item.id += "/poise";

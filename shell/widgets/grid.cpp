@@ -73,12 +73,13 @@ void read_keys(GridInput& input, ImGuiID id) {
         input.down +=
             page_of_cells * (int(pressed_again(ImGuiKey_PageDown)) - int(pressed_again(ImGuiKey_PageUp)));
     }
-    input.row_start = pressed_once(ImGuiKey_Home);
-    input.row_end = pressed_once(ImGuiKey_End);
-    if (io.KeyCtrl) {
-        input.down = all_cells * (int(input.row_end) - int(input.row_start));
-        return;
+    const bool home = pressed_once(ImGuiKey_Home);
+    const bool end = pressed_once(ImGuiKey_End);
+    if (home || end) {
+        input.right = end ? all_cells : -all_cells;
+        if (io.KeyCtrl) input.down = input.right;
     }
+    if (io.KeyCtrl) return;
     input.clear = pressed_once(ImGuiKey_Delete) || pressed_once(ImGuiKey_Backspace);
     input.edit = pressed_once(ImGuiKey_F2) || pressed_once(ImGuiKey_Enter) ||
                  pressed_once(ImGuiKey_KeypadEnter) || pressed_once(ImGuiKey_Space);
@@ -172,11 +173,9 @@ CellLeft cell_editor(Ui& ui, CellEdit& edit, std::string_view name, const Box& b
     ImGui::PushFont(font(Font::strong));
     const float padding = std::max(2.0F, (box.h - font_size(Font::strong)) / 2);
     ImGui::PushStyleVar(ImGuiStyleVar_FramePadding, {11, padding});
-    ImGui::PushStyleColor(ImGuiCol_Border, edit.wrong ? ui.look().red : ui.look().brass);
     ImGui::SetNextItemWidth(box.w);
     ImGui::InputText("##text", edit.text.data(), edit.text.capacity() + 1,
                      ImGuiInputTextFlags_CallbackResize | ImGuiInputTextFlags_CallbackAlways, grow, &edit);
-    ImGui::PopStyleColor();
     ImGui::PopStyleVar();
     ImGui::PopFont();
     const bool active = ImGui::IsItemActive();
@@ -194,6 +193,7 @@ CellLeft cell_editor(Ui& ui, CellEdit& edit, std::string_view name, const Box& b
         result = how_left();
     }
     cell_ring(ui, box);
+    if (edit.wrong) ImGui::GetWindowDrawList()->AddRect(box.at(), box.end(), ui.look().red, 6, 0, 3);
     LedgerItem report;
     report.id = edit.id;
     report.label = std::string(name);
@@ -264,10 +264,17 @@ void scroll_into_sight(const Box& wanted, float covered_left, float covered_top)
     const float right = wanted.right() - sight.right();
     const float top = wanted.y - (sight.y + covered_top);
     const float bottom = wanted.bottom() - sight.bottom();
-    if (left < 0 || right > 0)
-        ImGui::SetScrollX(ImGui::GetScrollX() + (left < 0 ? left : std::min(right, left)));
-    if (top < 0 || bottom > 0)
-        ImGui::SetScrollY(ImGui::GetScrollY() + (top < 0 ? top : std::min(bottom, top)));
+    const float by_x = left < 0 ? left : std::clamp(right, 0.0F, left);
+    const float by_y = top < 0 ? top : std::clamp(bottom, 0.0F, top);
+    if (by_x != 0) ImGui::SetScrollX(ImGui::GetScrollX() + by_x);
+    if (by_y != 0) ImGui::SetScrollY(ImGui::GetScrollY() + by_y);
+    // On a small page this area stands in another one that is scrolled too.
+    ImGuiWindow* around = ImGui::GetCurrentWindow()->ParentWindow;
+    if (around != nullptr && (around->Flags & ImGuiWindowFlags_ChildWindow) != 0) {
+        const ImVec2 at{wanted.x - by_x, wanted.y - by_y};
+        ImGui::ScrollToRect(around, {at, {at.x + wanted.w, at.y + wanted.h}},
+                            ImGuiScrollFlags_KeepVisibleEdgeX | ImGuiScrollFlags_KeepVisibleEdgeY);
+    }
 }
 
 } // namespace steelyard

@@ -18,8 +18,6 @@ struct GridInput {
     ImVec2 began{0, 0};
     int right = 0; ///< Cells to go by arrow keys; far ones for Home, End, Page Up and Page Down.
     int down = 0;
-    bool row_start = false;
-    bool row_end = false;
     bool edit = false;     ///< F2, Enter or Space.
     bool clear = false;    ///< Delete or Backspace.
     bool copy = false;     ///< Ctrl+C, or Cmd+C.

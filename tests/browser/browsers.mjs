@@ -61,10 +61,12 @@ function firefoxPreferences(downloads) {
     };
 }
 
+const downloadTo = (folder) => ({ policy: 'allow', downloadPath: folder });
+
 /// Starts a browser. `preferences`: further ones for Firefox; `args`: further ones for Chromium.
 export async function startBrowser(name, { preferences = {}, args = [] } = {}) {
     const downloads = mkdtempSync(join(tmpdir(), 'steelyard-downloads-'));
-    const common = { headless: true, defaultViewport: null, downloadBehavior: { policy: 'allow', downloadPath: downloads } };
+    const common = { headless: true, defaultViewport: null, downloadBehavior: downloadTo(downloads) };
     const started =
         name === 'firefox'
             ? await puppeteer.launch({
@@ -88,6 +90,11 @@ class Browser {
         this.puppeteer = started;
         this.downloads = downloads;
         this.taken = mkdtempSync(join(tmpdir(), 'steelyard-taken-'));
+    }
+
+    /// A profile of its own within the browser.
+    newContext() {
+        return this.puppeteer.createBrowserContext({ downloadBehavior: downloadTo(this.downloads) });
     }
 
     /// The path of the one downloaded file with such a name, waited for, and removed before the next.

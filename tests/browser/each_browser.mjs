@@ -20,7 +20,7 @@ export function inEachBrowser(title, declare) {
 
             const test = (what, action) =>
                 it(what, { timeout: 120000 }, async () => {
-                    const context = await browser.puppeteer.createBrowserContext();
+                    const context = await browser.newContext();
                     const pages = [];
                     const open = async ({ quiet = true, ...options } = {}) => {
                         const page = await openPage(browser, { context, ...options });

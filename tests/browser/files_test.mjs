@@ -103,10 +103,8 @@ inEachBrowser('files', (test, name) => {
                 (type, called, length) => {
                     const data = new DataTransfer();
                     data.items.add(new File(['x'.repeat(length)], called));
-                    const event =
-                        type === 'paste'
-                            ? new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true })
-                            : new DragEvent('drop', { dataTransfer: data, bubbles: true, cancelable: true });
+                    const event = new Event(type, { bubbles: true, cancelable: true });
+                    Object.defineProperty(event, type === 'paste' ? 'clipboardData' : 'dataTransfer', { value: data });
                     return document.getElementById('picture').dispatchEvent(event);
                 },
                 kind, fileName, size

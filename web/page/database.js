@@ -1,16 +1,21 @@
 // IndexedDB, opened when first needed. What comes from it is as untrusted as a file: on file:// other local pages may share it.
 
 const databaseName = 'steelyard.decisions';
-const headsStore = 'heads'; // key id: { id, title, saved_at, revision }, for the list
 const statesStore = 'states'; // key [id, revision]: { id, title, saved_at, revision, text }
 
 const openTimeout = 5000; // milliseconds
 const answerTimeout = 15000; // what is asked takes milliseconds; past this the browser will not answer at all
 
+const newerElsewhere =
+    'Another page has stored a newer state of this decision. Save this one to a file, then open the other.';
+
 function storeProblem(error) {
     const name = (error && error.name) || 'no reason given';
     if (name === 'QuotaExceededError') {
         return 'The browser has no room left for this page.';
+    }
+    if (name === 'ConstraintError') {
+        return newerElsewhere;
     }
     return 'The browser refuses its store (' + name + (error && error.message ? ': ' + error.message : '') + ').';
 }
@@ -51,7 +56,6 @@ function makeDatabase() {
         }
         timer = setTimeout(() => settle(null, 'The browser does not open its store.'), openTimeout);
         request.onupgradeneeded = () => {
-            request.result.createObjectStore(headsStore, { keyPath: 'id' });
             request.result.createObjectStore(statesStore, { keyPath: ['id', 'revision'] });
         };
         request.onblocked = () => settle(null, 'Another page keeps the browser’s store open in an older form. Close it.');
@@ -82,8 +86,8 @@ function makeDatabase() {
         }
     }
 
-    // Runs `body(stores, report, refuse)` in one transaction over both stores. Then exactly one call of `done(problem, value)`:
-    // with what was reported last, or with why nothing was changed.
+    // Runs `body(states, ask, complain)` in one transaction: `ask(request, answered)` watches over a request, `complain` sets a
+    // problem. Then exactly one call of `done(problem)`.
     function transact(mode, body, done) {
         run(true);
 
@@ -91,7 +95,7 @@ function makeDatabase() {
             withConnection((opened) => {
                 let transaction;
                 try {
-                    transaction = opened.transaction([headsStore, statesStore], mode, { durability: 'strict' });
+                    transaction = opened.transaction(statesStore, mode, { durability: 'strict' });
                 } catch (error) {
                     // The browser may close a connection and tell us only afterwards.
                     drop(opened);
@@ -107,43 +111,34 @@ function makeDatabase() {
         }
 
         function perform(transaction) {
-            let value;
             let problem = '';
             let finished = false;
-            let timer = 0;
             function finish(ended) {
                 if (!finished) {
                     finished = true;
                     clearTimeout(timer);
-                    done(ended, value);
+                    done(ended);
                 }
             }
-            function refuse(why) {
+            function complain(why) {
                 problem = problem || why;
+            }
+            function abort(why) {
+                complain(why);
                 try {
                     transaction.abort();
                 } catch (error) {
-                    finish(problem); // it has ended already
+                    finish(problem); // it has ended already, or is being committed
                 }
             }
-            timer = setTimeout(() => {
-                refuse('The browser’s store does not answer.');
+            const timer = setTimeout(() => {
+                abort('The browser’s store does not answer.');
                 finish(problem);
             }, answerTimeout);
-            transaction.oncomplete = () => finish('');
+            transaction.oncomplete = () => finish(problem);
             transaction.onabort = () => finish(problem || storeProblem(transaction.error));
-            transaction.onerror = (event) => event.preventDefault(); // each request's own handler has aborted already
-            const stores = {
-                heads: transaction.objectStore(headsStore),
-                states: transaction.objectStore(statesStore),
-                transaction,
-            };
-            // Every request goes through here, so that no failure is left out.
             const ask = (request, answered) => {
-                request.onerror = (event) => {
-                    event.preventDefault();
-                    refuse(request.error && request.error.name === 'ConstraintError' ? newerElsewhere : storeProblem(request.error));
-                };
+                request.onerror = () => complain(storeProblem(request.error));
                 request.onsuccess = () => {
                     if (answered && !finished) {
                         answered(request.result);
@@ -151,9 +146,13 @@ function makeDatabase() {
                 };
             };
             try {
-                body(stores, ask, (result) => (value = result), refuse);
+                body(transaction.objectStore(statesStore), ask, complain);
+                if (mode === 'readwrite') {
+                    // A page that is going away commits nothing by itself, and what is not committed blocks what follows.
+                    transaction.commit();
+                }
             } catch (error) {
-                refuse(storeProblem(error));
+                abort(storeProblem(error));
             }
         }
     }

@@ -94,14 +94,10 @@ async function start() {
         lessMotion.addEventListener('change', () => program.reduceMotion(lessMotion.matches));
 
         // Both events: a reload or a closed tab may come without the first, a phone's switch of programs without the second.
-        const keep = () => {
-            program.flush();
-            storage.hurry();
-        };
-        window.addEventListener('pagehide', keep);
+        window.addEventListener('pagehide', () => program.flush());
         document.addEventListener('visibilitychange', () => {
             if (document.hidden) {
-                keep();
+                program.flush();
                 pointer.letGo();
                 focus.release();
                 view.pause();

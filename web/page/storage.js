@@ -1,119 +1,93 @@
-// Decisions kept in the browser: for each a head for the list, and its last states. A state is never overwritten: its
-// revision is its key, so a second page that stores the same revision is refused by the store itself.
+// Decisions kept in the browser: the last states of each, under its id and a revision that rises with every one.
 
 const statesKept = 10;
 
-const newerElsewhere = 'Another page has stored a newer state of this decision. Save this one to a file, then open the other.';
 const takenOver = 'Another page has taken this decision over. Save this state to a file if it is not there.';
 
-function statesOf(id) {
-    return IDBKeyRange.bound([id], [id, []]); // an array sorts behind every number
-}
-
-function soundHead(head) {
-    return Boolean(head) && typeof head.id === 'string' && typeof head.title === 'string' && typeof head.saved_at === 'string';
+// All keys [id, revision] of a decision, up to a revision; an array sorts behind every number.
+function keysOf(id, last = []) {
+    return IDBKeyRange.bound([id], [id, last]);
 }
 
 function soundState(state) {
-    return soundHead(state) && typeof state.text === 'string' && Number.isSafeInteger(state.revision) && state.revision > 0;
+    const texts = [state.id, state.title, state.saved_at, state.text];
+    return texts.every((text) => typeof text === 'string') && Number.isSafeInteger(state.revision) && state.revision > 0;
 }
 
 function makeStorage(isLost) {
     const database = makeDatabase();
-    const inFlight = new Set();
 
-    // Latest saved first.
+    // Walks from the last key down. `take(state)` says where to go on: at the next key, at another one, or nowhere (null).
+    function walk(states, range, ask, take) {
+        ask(states.openCursor(range, 'prev'), (cursor) => {
+            const next = cursor ? take(cursor.value, cursor.key) : null;
+            if (next !== null) {
+                cursor.continue(next);
+            }
+        });
+    }
+
+    // The newest state of each, latest saved first, without their texts.
     function list(done) {
+        const found = [];
         database.transact(
             'readonly',
-            ({ heads }, ask, report) => ask(heads.getAll(), report),
-            (problem, found) => {
-                const sound = problem ? [] : found.filter(soundHead);
-                sound.sort((a, b) => (a.saved_at < b.saved_at ? 1 : a.saved_at > b.saved_at ? -1 : 0));
-                done(problem, sound);
+            (states, ask) =>
+                walk(states, null, ask, (state, [id]) => {
+                    if (!soundState(state)) {
+                        return undefined;
+                    }
+                    found.push({ id, title: state.title, saved_at: state.saved_at });
+                    return [id]; // before all its states: on to the next decision
+                }),
+            (problem) => {
+                found.sort((a, b) => (a.saved_at < b.saved_at ? 1 : a.saved_at > b.saved_at ? -1 : 0));
+                done(problem, problem ? [] : found);
             }
         );
     }
 
-    // The newest state that is one; null where there is none.
+    // The newest state; null where there is none.
     function load(id, done) {
+        let newest = null;
         database.transact(
             'readonly',
-            ({ states }, ask, report) => {
-                report(null);
-                ask(states.openCursor(statesOf(id), 'prev'), (cursor) => {
-                    if (cursor && soundState(cursor.value)) {
-                        report(cursor.value);
-                    } else if (cursor) {
-                        cursor.continue();
-                    }
-                });
-            },
-            (problem, state) => done(problem, problem ? null : state)
+            (states, ask) =>
+                walk(states, keysOf(id), ask, (state) => {
+                    newest = soundState(state) ? state : null;
+                    return newest ? null : undefined;
+                }),
+            (problem) => done(problem, problem ? null : newest)
         );
     }
 
-    function put({ heads, states }, ask, record, stored) {
-        ask(states.add(record), stored);
-        ask(heads.put({ id: record.id, title: record.title, saved_at: record.saved_at, revision: record.revision }));
-    }
-
-    // All requests are made at once: should the page go away now, they are with the browser already. The comparison comes
-    // first in the same transaction, which it takes back where a newer revision is there.
+    // Everything is asked for at once: a page that is going away hears no answer any more. A state is added, never replaced:
+    // where another page has stored this revision, the store itself refuses, whatever the browser then makes of the rest (one
+    // aborts, one commits). Where another page is so far ahead that it has removed this revision again, the newest key tells.
     function store(record, done) {
-        if (isLost(record.id)) {
+        const { id, revision } = record;
+        if (isLost(id)) {
             done(takenOver);
             return;
         }
-        inFlight.add(record);
         database.transact(
             'readwrite',
-            (stores, ask, report, refuse) => {
-                ask(stores.states.openKeyCursor(statesOf(record.id), 'prev'), (newest) => {
-                    if (newest && newest.key[1] >= record.revision) {
-                        refuse(newerElsewhere);
+            (states, ask, complain) => {
+                ask(states.add(record));
+                ask(states.openKeyCursor(keysOf(id), 'prev'), (newest) => {
+                    if (newest && newest.key[1] > revision) {
+                        complain(newerElsewhere);
                     }
                 });
-                put(stores, ask, record, () =>
-                    ask(stores.states.getAllKeys(statesOf(record.id)), (keys) =>
-                        keys.slice(0, -statesKept).forEach((key) => ask(stores.states.delete(key)))
-                    )
-                );
-            },
-            (problem) => {
-                inFlight.delete(record);
-                done(problem);
-            }
-        );
-    }
-
-    // The page is going away: what is on its way goes once more, committed without waiting for an answer. Where the first
-    // one got through, the state is there and the second is refused.
-    function hurry() {
-        for (const record of inFlight) {
-            database.transact(
-                'readwrite',
-                (stores, ask) => {
-                    put(stores, ask, record);
-                    if (stores.transaction.commit) {
-                        stores.transaction.commit();
-                    }
-                },
-                () => {}
-            );
-        }
-    }
-
-    function forget(id, done) {
-        database.transact(
-            'readwrite',
-            ({ heads, states }, ask) => {
-                ask(heads.delete(id));
-                ask(states.delete(statesOf(id)));
+                ask(states.delete(keysOf(id, revision - statesKept)));
             },
             done
         );
     }
 
-    return { list, load, store, hurry, forget };
+    function forget(id, done) {
+        database.transact('readwrite', (states, ask) => ask(states.delete(keysOf(id))), done);
+    }
+
+    return { list, load, store, forget };
 }

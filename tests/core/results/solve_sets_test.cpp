@@ -1,3 +1,4 @@
+#include <array>
 #include <catch_amalgamated.hpp>
 #include <cmath>
 #include <string>
@@ -7,17 +8,22 @@
 #include "core/results/solve.hpp"
 #include "tests/support/close.hpp"
 #include "tests/support/find_results.hpp"
+#include "tests/support/judged_decisions.hpp"
 #include "tests/support/pairs.hpp"
 #include "tests/support/round_trip.hpp"
 
-// What the results say of sets of pairs and of points: judges, combination, methods, what is open.
+// What the results say of sets of pairs: judges, combination, methods, indices, what is open.
 namespace steelyard {
 
 using Catch::Matchers::WithinAbs;
 using testing::check_close;
+using testing::criteria;
+using testing::judgment;
+using testing::judgments;
 using testing::leaf_of;
 using testing::noticed_at;
 using testing::open_words;
+using testing::options;
 using testing::set_of;
 using Pairs = std::vector<std::array<Id, 2>>;
 using Words = std::vector<std::string>;
@@ -25,38 +31,6 @@ using Words = std::vector<std::string>;
 namespace {
 
 constexpr double rounding = 1e-14;
-
-std::string judgment(const std::string& set, const std::string& by, const std::string& a,
-                     const std::string& b, const std::string& ratio) {
-    return R"({"set": ")" + set + R"(", "by": )" + (by.empty() ? "null" : "\"" + by + "\"") + R"(, "a": ")" +
-           a + R"(", "b": ")" + b + R"(", "ratio": )" + ratio + "}";
-}
-
-std::string judgments(const std::vector<std::string>& list) {
-    std::string text;
-    for (const auto& one : list) text += (text.empty() ? "" : ", ") + one;
-    return R"("judgments": [)" + text + "]";
-}
-
-/// Three criteria rated by nothing of interest, one option; three people of shares 1, 3 and 0.
-Results criteria(const std::string& more, const std::string& settings = "",
-                 const std::string& weights = "pairs") {
-    return solve(test::read(R"({"format": "steelyard-decision", "version": 1, "options": [{"id": "o1"}],
-        "people": [{"id": "p1", "share": 1}, {"id": "p2", "share": 3}, {"id": "p3", "share": 0}],
-        "criteria": {"id": "goal", "weights": ")" +
-                            weights + R"(", "children": [{"id": "a"}, {"id": "b"}, {"id": "c"}]},
-        "settings": {)" + settings +
-                            "}" + (more.empty() ? "" : ", " + more) + "}"));
-}
-
-/// One leaf of pairs and four options; people as above but p1 abstains as given.
-Results options(const std::string& option_list, const std::string& more, const std::string& abstains = "") {
-    return solve(test::read(R"({"format": "steelyard-decision", "version": 1, "options": [)" + option_list +
-                            R"(], "people": [{"id": "p1", "abstains": [)" + abstains +
-                            R"(]}, {"id": "p2", "share": 3}],
-        "criteria": {"id": "goal"}, )" +
-                            more + "}"));
-}
 
 const std::string full_p1 = judgment("goal", "p1", "a", "b", "2") + ", " +
                             judgment("goal", "p1", "b", "c", "3") + ", " +
@@ -357,122 +331,6 @@ TEST_CASE("sets: a skipped pair is open after all where the set has no weights")
         criteria(judgments({judgment("goal", "p1", "a", "b", "2")}) +
                  R"(, "finished": [{"set": "goal", "skipped": [["a", "c"], ["b", "c"]]}])");
     CHECK(open_words(results) == Words{"judgment goal a c", "judgment goal b c"});
-}
-
-TEST_CASE("sets: judgments of options out of play do not count where the others connect") {
-    const std::string list =
-        judgments({judgment("goal", "", "o1", "o2", "2"), judgment("goal", "", "o1", "o3", "9"),
-                   judgment("goal", "", "o3", "o2", "9")});
-    const Results results = options(R"({"id": "o1"}, {"id": "o2"}, {"id": "o3", "withdrawn": true})", list);
-    CHECK(set_of(results, "goal").items == std::vector<Id>{"o1", "o2"});
-    check_close(set_of(results, "goal").weights.value(), {2. / 3, 1. / 3}, rounding);
-    CHECK(noticed_at(results, "whole-set").empty());
-}
-
-TEST_CASE("sets: options only linked through one out of play take their values from the whole set") {
-    const std::string list =
-        judgments({judgment("goal", "", "o1", "o3", "2"), judgment("goal", "", "o3", "o2", "2")});
-    const Results results = options(R"({"id": "o1"}, {"id": "o2"}, {"id": "o3", "withdrawn": true})", list);
-    const SetResult& whole = set_of(results, "goal");
-    CHECK(whole.items == std::vector<Id>{"o1", "o2", "o3"});
-    check_close(whole.weights.value(), {4. / 7, 1. / 7, 2. / 7}, rounding);
-    CHECK(results.options == std::vector<Id>{"o1", "o2"});
-    check_close(results.scores, {1, .25}, rounding); // Against the best in play.
-    CHECK_FALSE(results.provisional);
-    CHECK(noticed_at(results, "whole-set") == Words{"/criteria"});
-    const Results shares = options(R"({"id": "o1"}, {"id": "o2"}, {"id": "o3", "withdrawn": true})",
-                                   R"("settings": {"synthesis": "distributive"}, )" + list);
-    check_close(shares.scores, {.8, .2}, rounding); // Restricted and set to sum 1 again.
-}
-
-TEST_CASE("sets: an option excluded by a must links the others as a withdrawn one does") {
-    const Results results =
-        options(R"({"id": "o1"}, {"id": "o2"}, {"id": "o3"})",
-                judgments({judgment("goal", "", "o1", "o3", "2"), judgment("goal", "", "o3", "o2", "2")}) +
-                    R"(, "requirements": [{"id": "r", "yes_no": true}],
-                       "checks": [{"requirement": "r", "option": "o3", "state": "failed"}])");
-    CHECK(results.options == std::vector<Id>{"o1", "o2"});
-    check_close(results.scores, {1, .25}, rounding);
-    CHECK(noticed_at(results, "whole-set").size() == 1);
-}
-
-TEST_CASE("sets: where not even the whole set connects, only the options in play are told of") {
-    const Results results = options(R"({"id": "o1"}, {"id": "o2"}, {"id": "o3", "withdrawn": true})",
-                                    judgments({judgment("goal", "", "o1", "o3", "2")}));
-    CHECK(set_of(results, "goal").items == std::vector<Id>{"o1", "o2"});
-    CHECK(noticed_at(results, "whole-set").empty());
-    CHECK(noticed_at(results, "not-connected").size() == 1);
-    CHECK(results.provisional);
-}
-
-TEST_CASE("sets: with one option in play a leaf of pairs has no set and is worth 1") {
-    const Results results = options(R"({"id": "o1"}, {"id": "o2", "withdrawn": true})",
-                                    judgments({judgment("goal", "", "o1", "o2", "0.25")}));
-    CHECK(results.sets.empty());
-    check_close(results.scores, {1}, 0);
-    CHECK_FALSE(results.provisional);
-}
-
-TEST_CASE("sets: a person's pairs with an option he abstains on do not count") {
-    const std::string list =
-        judgments({judgment("goal", "p1", "o1", "o2", "9"), judgment("goal", "p1", "o2", "o3", "2"),
-                   judgment("goal", "p2", "o1", "o2", "3"), judgment("goal", "p2", "o2", "o3", "2")});
-    const std::string three = R"({"id": "o1"}, {"id": "o2"}, {"id": "o3"})";
-    const Results results = options(three, list, R"("o1")");
-    CHECK(set_of(results, "goal", "p1").missing == Pairs{{"o1", "o2"}, {"o1", "o3"}});
-    check_close(set_of(results, "goal").weights.value(), testing::normalised({6, 2, 1}), rounding);
-    // Abstaining on all he judged he has no entry.
-    CHECK(options(three, list, R"("o2")").sets.size() == 2);
-}
-
-TEST_CASE("points: normalised, averaged by share; an agreed entry stands alone") {
-    const std::string p1 = R"({"set": "goal", "by": "p1", "points": {"c": 10, "a": 20, "b": 10}})";
-    const std::string p2 = R"({"set": "goal", "by": "p2", "points": {"a": 0, "b": 1, "c": 1}})";
-    const std::string p3 = R"({"set": "goal", "by": "p3", "points": {"a": 1, "b": 0, "c": 0}})";
-    const Results own = criteria(R"("points": [)" + p1 + ", " + p2 + ", " + p3 + "]", "", "points");
-    REQUIRE(own.sets.size() == 4);
-    check_close(own.sets[0].weights.value(), {.125, .4375, .4375}, rounding);
-    check_close(set_of(own, "goal", "p1").weights.value(), {.5, .25, .25}, rounding);
-    check_close(set_of(own, "goal", "p3").weights.value(), {1, 0, 0}, 0);
-    CHECK(own.sets[0].from_points);
-    CHECK(own.open.empty());
-    CHECK_FALSE(own.provisional);
-
-    const Results agreed = criteria(
-        R"("points": [{"set": "goal", "points": {"a": 1, "b": 2, "c": 1}}, )" + p1 + "]", "", "points");
-    for (const auto& entry : agreed.sets) check_close(entry.weights.value(), {.25, .5, .25}, rounding);
-    CHECK(agreed.sets.size() == 2);
-}
-
-TEST_CASE("points: the last entry of a person stands") {
-    const Results results = criteria(R"("points": [
-        {"set": "goal", "by": "p1", "points": {"a": 1, "b": 0, "c": 0}},
-        {"set": "goal", "by": "p1", "points": {"a": 0, "b": 0, "c": 1}}])",
-                                     "", "points");
-    check_close(set_of(results, "goal").weights.value(), {0, 0, 1}, 0);
-}
-
-TEST_CASE("points: with nobody whose share counts the criteria count equally, and the set is open") {
-    for (const std::string& points :
-         {std::string{}, std::string{R"({"set": "goal", "by": "p3", "points": {"a": 1, "b": 0, "c": 0}})"}}) {
-        const Results results = criteria(R"("points": [)" + points + "]", "", "points");
-        CHECK_FALSE(set_of(results, "goal").weights.has_value());
-        CHECK_THAT(leaf_of(results, "a").weight, WithinAbs(1. / 3, rounding));
-        CHECK(results.provisional);
-        CHECK(open_words(results) == Words{"points goal"});
-    }
-}
-
-TEST_CASE("points: such entries have no indices") {
-    const Results results =
-        criteria(R"("points": [{"set": "goal", "points": {"a": 1, "b": 2, "c": 1}}])", "", "points");
-    const SetResult& set = set_of(results, "goal");
-    CHECK(set.missing.empty());
-    CHECK(set.misfits.empty());
-    CHECK_FALSE(set.eigenvector.has_value());
-    CHECK_FALSE(set.lambda_max.has_value());
-    CHECK_FALSE(set.cr.has_value());
-    CHECK_FALSE(set.koczkodaj.has_value());
 }
 
 TEST_CASE("sets: in the order of the tree, whatever kind they are") {

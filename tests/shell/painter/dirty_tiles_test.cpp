@@ -1,3 +1,4 @@
+#include <algorithm>
 #include <catch_amalgamated.hpp>
 
 #include "shell/painter/painter.hpp"
@@ -9,6 +10,7 @@ namespace {
 
 using testing::Dice;
 using testing::DrawLists;
+using testing::random_colour;
 using testing::random_drawing;
 using testing::SampleScreen;
 using testing::TestAtlas;
@@ -130,6 +132,62 @@ TEST_CASE("frames painted one after another are the frames painted afresh") {
     }
     // Else the test would not have met what it is about.
     CHECK(partial > 30);
+}
+
+/// Changes one thing about a drawing: a corner's place, colour or texel, a rectangle's place or colour, a
+/// clip rectangle.
+void change_something(Dice& dice, ImDrawData& data) {
+    ImDrawList& list = *data.CmdLists[dice.below(data.CmdLists.Size)];
+    const int corners = list.VtxBuffer.Size;
+    if (corners == 0 || dice.chance(10)) {
+        ImVec4& clip = list.CmdBuffer[dice.below(list.CmdBuffer.Size)].ClipRect;
+        (dice.chance(50) ? clip.x : clip.w) += static_cast<float>(dice.between(1, 8));
+        return;
+    }
+    const int first = dice.below(corners);
+    // Shapes have three to eight corners; four are a rectangle.
+    const int last = std::min(corners, first + dice.between(1, 4));
+    const int what = dice.below(4);
+    const auto by = static_cast<float>(dice.between(1, 40)) / 4;
+    const ImU32 colour = random_colour(dice);
+    for (int i = first; i < last; ++i) {
+        ImDrawVert& corner = list.VtxBuffer[i];
+        if (what == 0) corner.pos.x += by;
+        if (what == 1) corner.pos.y -= by;
+        if (what == 2) corner.col = colour;
+        if (what == 3) corner.uv.x = std::min(corner.uv.x + by / TestAtlas::width, 1.0F);
+    }
+}
+
+TEST_CASE("whatever changes in a drawing, the frame is the one painted afresh") {
+    int differing = 0;
+    for (std::uint64_t seed = 200; seed < 212; ++seed) {
+        Dice dice(seed);
+        DrawLists lists = random_drawing(dice, width, height, 1, 30);
+        NewPainter painter;
+        painter.paint(lists.data(), width, height, ground);
+        for (int change = 0; change < 60; ++change) {
+            const auto before = painter.pixels();
+            change_something(dice, lists.data());
+            painter.paint(lists.data(), width, height, ground);
+            NewPainter afresh;
+            afresh.paint(lists.data(), width, height, ground);
+            INFO("seed " << seed << " change " << change);
+            REQUIRE(painter.pixels() == afresh.pixels());
+            if (before != painter.pixels()) ++differing;
+        }
+    }
+    CHECK(differing > 200);
+}
+
+TEST_CASE("a rectangle over whole tiles that changes its colour is painted again") {
+    NewPainter painter;
+    for (const ImU32 colour : {0xFF0000FFU, 0xFF00FF00U, 0xFF00FF01U}) {
+        DrawLists lists(width, height, 1);
+        lists.rectangle({0, 0}, {width, height}, colour);
+        CHECK(area(painter.paint(lists.data(), width, height, ground)) == std::int64_t{width} * height);
+        CHECK(painter.pixels().front() == colour);
+    }
 }
 
 TEST_CASE("on a real screen a bar that grows repaints little, and the picture is that painted afresh") {

@@ -136,8 +136,8 @@ TEST_CASE("letters between pixels go to the nearest, all of a line to the same s
     whole.picture({3, 0}, {8, 5}, {10, 5}, {15, 10}, 0xFFFFFFFF);
     const auto expected = painted(whole, 40, 10);
     CHECK(picture(0) == expected);
-    CHECK(picture(0.001F) == expected);
-    CHECK(picture(-0.001F) == expected);
+    CHECK(picture(0.005F) == expected);
+    CHECK(picture(-0.005F) == expected);
 }
 
 TEST_CASE("a letter cut by a clip rectangle keeps its place") {

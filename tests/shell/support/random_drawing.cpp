@@ -42,9 +42,9 @@ private:
         }
     }
 
-    /// 1/16 CSS pixel is 5/64 device pixel at density 1.25.
+    /// 1/64 CSS pixel is 5/256 device pixel at density 1.25.
     float place(int size) {
-        return static_cast<float>(dice_.between(-16 * beside, 16 * (size + beside))) / 16;
+        return static_cast<float>(dice_.between(-64 * beside, 64 * (size + beside))) / 64;
     }
 
     ImVec2 point() {
@@ -116,8 +116,10 @@ private:
     void textured_triangle() {
         const auto at = points();
         const ImVec2 a = texel();
-        const ImVec2 b = texel();
-        const ImVec2 c = texel();
+        // Now and then one texel for all: a plain colour, more or less transparent.
+        const bool plain = dice_.chance(30);
+        const ImVec2 b = plain ? a : texel();
+        const ImVec2 c = plain ? a : texel();
         const ImU32 colour = random_colour(dice_);
         const ImU32 other = dice_.chance(50) ? colour : random_colour(dice_);
         drawing_.textured_triangle({at[0], at[1], at[2]}, {a, b, c}, {colour, other, colour});
