@@ -3,6 +3,8 @@
 #include <imgui.h>
 #include <imgui_internal.h>
 
+#include <algorithm>
+
 #include "shell/fonts.hpp"
 
 namespace steelyard {
@@ -28,6 +30,9 @@ ImGuiContext* make_context(float density) {
 }
 
 void set_density(float density) {
+    density = std::clamp(density, 0.5F, 8.0F);
+    const ImGuiIO& io = ImGui::GetIO();
+    if (io.Fonts->IsBuilt() && io.FontGlobalScale == 1 / density) return;
     build_fonts(density);
     // Curves are broken into pieces whose error is counted in CSS pixels: keep it the same in device pixels.
     const ImGuiStyle defaults;

@@ -1,6 +1,5 @@
 #include "shell/fonts.hpp"
 
-#include <algorithm>
 #include <array>
 #include <cmath>
 
@@ -63,7 +62,6 @@ float font_size(Font which) {
 }
 
 void build_fonts(float density) {
-    density = std::clamp(density, 0.5F, 8.0F);
     ImGuiIO& io = ImGui::GetIO();
     io.Fonts->Clear();
     io.Fonts->Flags = ImFontAtlasFlags_NoBakedLines | ImFontAtlasFlags_NoMouseCursors;

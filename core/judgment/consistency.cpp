@@ -9,6 +9,9 @@ namespace {
 /// Ratios this close to 1 are ties: means of judges' ratios come out at 1 only up to rounding.
 constexpr double tie = 1e-12;
 
+/// Relative rounding of an eigenvalue of a consistent matrix, with room to spare.
+constexpr double rounding = 1e-14;
+
 /// 1 where the first counts more, -1 where less, 0 for a tie.
 int preference(double ratio) {
     if (std::abs(ratio - 1) <= tie) return 0;
@@ -36,7 +39,9 @@ void each_triad(const PairMatrix& pairs, Visit visit) {
 std::optional<double> consistency_index(double lambda_max, std::size_t n) {
     if (n < 2) return std::nullopt;
     const auto size = static_cast<double>(n);
-    return std::max(0.0, (lambda_max - size) / (size - 1));
+    const double excess = lambda_max - size;
+    // A consistent matrix has lambda = n; what rounding leaves of it would differ from machine to machine.
+    return excess < rounding * size ? 0 : excess / (size - 1);
 }
 
 double lambda_by_hand(const Eigen::MatrixXd& matrix, const Weights& weights) {
@@ -56,7 +61,8 @@ std::optional<double> geometric_consistency_index(const PairMatrix& pairs) {
             sum += e * e;
         }
     }
-    return 2 * sum / static_cast<double>((n - 1) * (n - 2));
+    const double index = 2 * sum / static_cast<double>((n - 1) * (n - 2));
+    return index < rounding * rounding ? 0 : index; // Squares of rounding.
 }
 
 std::optional<WorstTriad> koczkodaj_index(const PairMatrix& pairs) {

@@ -265,8 +265,17 @@ private:
             if (leaf->rate != RateBy::figure || !leaf->cost_sheet) continue;
             ComputedFigures computed{leaf->id, {}};
             for (const auto& option : d_.options) {
-                if (const auto x = figures_.of(leaf->id, option.id).value)
-                    computed.values.emplace_back(option.id, *x);
+                const auto x = figures_.of(leaf->id, option.id).value;
+                if (!x) continue;
+                computed.values.emplace_back(option.id, *x);
+                if (leaf->curve && !worth_of(*leaf->curve, *x)) {
+                    results_.notices.push_back({"not-positive",
+                                                "The cost sheet of \"" + option_name(d_, option.id) +
+                                                    "\" on \"" + node_name(d_, leaf->id) +
+                                                    "\" comes to 0 or less, which counts as missing under a "
+                                                    "proportional curve.",
+                                                ""});
+                }
             }
             results_.figures.push_back(std::move(computed));
         }

@@ -66,17 +66,18 @@ private:
             const Box left = box.take_left(width * 0.95f, gap);
             const Box middle = box.take_left(width * 1.1f, gap);
             // One after the other, since the keyboard goes through them in this order.
-            const float first = stack(desk, left, {question_card, options_card, people_card});
+            const float first = stack(desk, left, {question_card, options_card, people_card, notes_card});
             const float second = stack(desk, middle, {criteria_card});
             return std::max({first, second, stack(desk, box, {musts_card, settings_card})});
         }
         if (box.w >= two_columns) {
             const Box left = box.take_left(box.w * 0.43f, gap);
-            const float first = stack(desk, left, {question_card, options_card, people_card, settings_card});
-            return std::max(first, stack(desk, box, {criteria_card, musts_card}));
+            const float first = stack(desk, left, {question_card, options_card, people_card, notes_card});
+            return std::max(first, stack(desk, box, {criteria_card, musts_card, settings_card}));
         }
-        return stack(desk, box,
-                     {question_card, options_card, criteria_card, musts_card, people_card, settings_card});
+        return stack(
+            desk, box,
+            {question_card, options_card, criteria_card, musts_card, people_card, notes_card, settings_card});
     }
 
     /// Opens what another room or the line below points at and puts the keyboard there.

@@ -189,13 +189,19 @@ float question_card(const Desk& desk, ImVec2 at, float width) {
     set_heading(desk, Heading::title, captioned_line(desk, column, "title", "Title", d.title));
     set_heading(desk, Heading::question,
                 captioned_lines(desk, column, "question", "What is to be decided", d.question));
-    Column left{column.x, column.y, (column.w - 12) / 2};
-    Column right{column.x + left.w + 12, column.y, left.w};
+    Column left{column.x, column.y, std::min(124.0f, (column.w - 12) / 2)};
+    Column right{column.x + left.w + 12, column.y, column.w - left.w - 12};
     set_heading(desk, Heading::decide_by,
                 captioned_line(desk, left, "decide-by", "Decide by", d.decide_by, "year-month-day"));
     set_heading(desk, Heading::author, captioned_line(desk, right, "author", "Author", d.author));
     column.y = left.y;
-    set_heading(desk, Heading::notes, captioned_lines(desk, column, "notes", "Notes", d.notes, 5));
+    return card.end(column.y - 8);
+}
+
+float notes_card(const Desk& desk, ImVec2 at, float width) {
+    GrowingCard card(desk.ui, at, width);
+    Column column = inside(card, "Notes");
+    set_heading(desk, Heading::notes, lines_field(desk, column, "notes", "Notes", desk.decision().notes, 10));
     return card.end(column.y - 8);
 }
 

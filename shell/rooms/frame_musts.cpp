@@ -163,17 +163,16 @@ void must_row(const Desk& desk, Column& column, std::size_t index) {
     const Decision& d = desk.decision();
     const Requirement& must = d.requirements[index];
     const std::string number = std::to_string(index + 1);
-    Box row = column.next(field_height, 2);
-    const Box more = row.take_right(30, 4);
-    if (auto name =
-            line_field(desk, "must-name/" + must.id, "Name of must " + number, must.name, row, "Name")) {
+    const Box more{column.x + column.w - 30, column.y, 30, field_height};
+    Column row{column.x, column.y, column.w - 34};
+    if (auto name = name_field(desk, row, "must-name/" + must.id, "Name of must " + number, must.name)) {
         Requirement changed = must;
         changed.name = std::move(*name);
         change(desk, std::move(changed));
     }
     more_button(desk, "must-more/" + must.id, "must " + number, more, desk.state.must, must.id);
     const bool opened = desk.state.must == must.id;
-    Column below{row.x + 10, column.y, row.w - 10};
+    Column below{row.x + 10, row.y, row.w - 10};
     if (!opened) {
         draw_text(desk.ui, {below.x, below.y}, summary(d, must),
                   {.font = Font::small, .ink = desk.look().quiet, .max_width = below.w});

@@ -42,9 +42,8 @@ std::optional<std::string> captioned_line(const Desk& desk, Column& column, std:
     return line_field(desk, id, name, value, column.next(field_height), hint);
 }
 
-std::optional<std::string> captioned_lines(const Desk& desk, Column& column, std::string_view id,
-                                           std::string_view name, const std::string& value, int most) {
-    caption(desk, column, name);
+std::optional<std::string> lines_field(const Desk& desk, Column& column, std::string_view id,
+                                       std::string_view name, const std::string& value, int most) {
     if (!desk.may_edit()) {
         column.y += draw_paragraph(desk.ui, {column.x, column.y}, column.w, value) + 8;
         return std::nullopt;
@@ -52,6 +51,23 @@ std::optional<std::string> captioned_lines(const Desk& desk, Column& column, std
     const std::string* draft = draft_of(desk.ui, id);
     const float height = wrapped_height(draft != nullptr ? *draft : value, column.w, 2, most);
     return wrapped_area(desk.ui, id, name, value, column.next(height));
+}
+
+std::optional<std::string> captioned_lines(const Desk& desk, Column& column, std::string_view id,
+                                           std::string_view name, const std::string& value, int most) {
+    caption(desk, column, name);
+    return lines_field(desk, column, id, name, value, most);
+}
+
+std::optional<std::string> name_field(const Desk& desk, Column& column, std::string_view id,
+                                      std::string_view name, const std::string& value) {
+    if (!desk.may_edit()) {
+        column.y += draw_paragraph(desk.ui, {column.x, column.y}, column.w, value) + 4;
+        return std::nullopt;
+    }
+    const std::string* draft = draft_of(desk.ui, id);
+    const float height = wrapped_height(draft != nullptr ? *draft : value, column.w, 1, 4);
+    return wrapped_area(desk.ui, id, name, value, column.next(height, 2), EnterKey::finishes, "Name");
 }
 
 Typed number_field(const Desk& desk, std::string_view id, std::string_view name,

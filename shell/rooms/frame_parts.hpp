@@ -64,12 +64,20 @@ void remark(const Desk& desk, Column& column, std::string_view text, ImU32 ink =
 std::optional<std::string> line_field(const Desk& desk, std::string_view id, std::string_view name,
                                       const std::string& value, const Box& box, std::string_view hint = {});
 
-/// A field with its name above it: one line, or as many as its text needs, two at least and `most` at most.
+/// A field of as many lines as its text needs, two at least and `most` at most.
+std::optional<std::string> lines_field(const Desk& desk, Column& column, std::string_view id,
+                                       std::string_view name, const std::string& value, int most = 6);
+
+/// The same with its name above it.
 std::optional<std::string> captioned_line(const Desk& desk, Column& column, std::string_view id,
                                           std::string_view name, const std::string& value,
                                           std::string_view hint = {});
 std::optional<std::string> captioned_lines(const Desk& desk, Column& column, std::string_view id,
                                            std::string_view name, const std::string& value, int most = 6);
+
+/// A name that may be a whole sentence: all of it is shown.
+std::optional<std::string> name_field(const Desk& desk, Column& column, std::string_view id,
+                                      std::string_view name, const std::string& value);
 
 /// A number typed: none in `value` where the field was emptied.
 struct Typed {
@@ -126,6 +134,7 @@ std::vector<const Node*> figure_leaves(const Decision& decision);
 
 /// The cards. Each is drawn at a place in a width, as tall as it needs, and gives its bottom.
 float question_card(const Desk& desk, ImVec2 at, float width);
+float notes_card(const Desk& desk, ImVec2 at, float width);
 float options_card(const Desk& desk, ImVec2 at, float width);
 float people_card(const Desk& desk, ImVec2 at, float width);
 float criteria_card(const Desk& desk, ImVec2 at, float width);

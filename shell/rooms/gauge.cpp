@@ -21,6 +21,7 @@ constexpr float gap = 12;
 constexpr float lowest_room = 470;
 constexpr float narrowest_side_by_side = 640;
 constexpr float lowest_table = 260;
+constexpr float slit = 160;
 constexpr float lowest_cards = 216;
 constexpr float highest_cards = 340;
 
@@ -41,7 +42,7 @@ public:
         const Box inner = scroll.inner();
         Box page{inner.x, inner.y, inner.w, 1e5F};
         draw_heading(ui, view, page.take_top(heading_height, 8));
-        const Box table = page.take_top(std::max(lowest_table, 0.7F * area.h), gap);
+        const Box table = page.take_top(table_height(area.h), gap);
         const Box cards = page.take_top(stacked ? 2 * lowest_cards + gap : lowest_cards, gap);
         draw_main(ui, view, actions, table, cards);
         scroll.reach(page.y);
@@ -65,6 +66,11 @@ public:
     void reset() override { *this = GaugeRoom(); }
 
 private:
+    /// On a low page the whole table at most, so that its head stays in sight with the rows.
+    static float table_height(float page) {
+        return std::min(std::max(lowest_table, 0.7F * page), std::max(slit, page));
+    }
+
     void update(const RoomView& view) {
         if (model_of_ != view.results.decision_sha256 || person_ != view.person || model_of_.empty()) {
             model_ = make_model(view);

@@ -31,6 +31,7 @@ std::optional<double> figure_of(const RoomView& view, const Node& leaf, const Id
 struct LocalWorth {
     double worth = 0;
     bool stand_in = false;
+    bool nobody_known = false; ///< No option in play has one of its own: all count alike.
 };
 std::optional<LocalWorth> local_worth(const Results& results, const Id& leaf, const Id& option);
 

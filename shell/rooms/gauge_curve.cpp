@@ -174,7 +174,7 @@ private:
 
     void anchors(Form& form, const TargetCurve& shape) {
         const auto target = form.number("curve-target", "Full at", name("Target"), shape.target, 0, 2);
-        const auto away = form.number("curve-tolerance", "None this far off", name("Distance worth nothing"),
+        const auto away = form.number("curve-tolerance", "None at \xC2\xB1", name("Distance worth nothing"),
                                       shape.tolerance, 1, 2);
         const TargetCurve next{target ? target->value_or(shape.target) : shape.target,
                                away ? away->value_or(shape.tolerance) : shape.tolerance};
@@ -286,7 +286,9 @@ std::optional<LocalWorth> local_worth(const Results& results, const Id& leaf, co
                                     [&](const LeafResult& one) { return one.leaf == leaf; });
     if (at == results.options.end() || found == results.leaves.end()) return std::nullopt;
     const auto o = static_cast<std::size_t>(at - results.options.begin());
-    return LocalWorth{found->local[o], found->missing[o]};
+    const bool nobody =
+        std::all_of(found->missing.begin(), found->missing.end(), [](bool missing) { return missing; });
+    return LocalWorth{found->local[o], found->missing[o], nobody};
 }
 
 bool in_play(const Results& results, const Id& option) {

@@ -15,6 +15,7 @@ namespace {
 
 constexpr float line_height = 40;
 constexpr float worth_width = 76;
+constexpr float weight_width = 94;
 constexpr float mark_size = 20;
 
 /// Options whose agreed grade is this one, or on which somebody gave it while none is agreed. A person who
@@ -93,7 +94,7 @@ private:
         const std::string shown = grade.name.empty() ? grade.id : grade.name;
         const auto here = options_at(view_, leaf_.id, grade.id);
         const Box remove = line.take_right(24, 8);
-        Box worth = line.take_right(worth_width, 10);
+        Box worth = line.take_right(leaf_.worths == WorthsBy::pairs ? weight_width : worth_width, 10);
         const float marks = std::min(static_cast<float>(here.size()) * (mark_size + 3), 0.4F * line.w);
         Box place = line.take_right(marks, 8);
         if (view_.read_only) {

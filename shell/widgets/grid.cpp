@@ -268,13 +268,15 @@ void scroll_into_sight(const Box& wanted, float covered_left, float covered_top)
     const float by_y = top < 0 ? top : std::clamp(bottom, 0.0F, top);
     if (by_x != 0) ImGui::SetScrollX(ImGui::GetScrollX() + by_x);
     if (by_y != 0) ImGui::SetScrollY(ImGui::GetScrollY() + by_y);
-    // On a small page this area stands in another one that is scrolled too.
+    // On a small page this area stands in another one that is scrolled too. It is shown whole if it fits
+    // there, so that what is covered by heads is seen with them.
     ImGuiWindow* around = ImGui::GetCurrentWindow()->ParentWindow;
-    if (around != nullptr && (around->Flags & ImGuiWindowFlags_ChildWindow) != 0) {
-        const ImVec2 at{wanted.x - by_x, wanted.y - by_y};
-        ImGui::ScrollToRect(around, {at, {at.x + wanted.w, at.y + wanted.h}},
-                            ImGuiScrollFlags_KeepVisibleEdgeX | ImGuiScrollFlags_KeepVisibleEdgeY);
-    }
+    if (around == nullptr || (around->Flags & ImGuiWindowFlags_ChildWindow) == 0) return;
+    const bool fits = sight.h <= around->InnerRect.GetHeight();
+    const ImVec2 at = fits ? sight.at() : ImVec2{wanted.x - by_x, wanted.y - by_y};
+    const ImVec2 end = fits ? sight.end() : ImVec2{at.x + wanted.w, at.y + wanted.h};
+    ImGui::ScrollToRect(around, {at, end},
+                        ImGuiScrollFlags_KeepVisibleEdgeX | ImGuiScrollFlags_KeepVisibleEdgeY);
 }
 
 } // namespace steelyard

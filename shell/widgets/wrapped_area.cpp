@@ -33,6 +33,7 @@ struct Editing {
     std::string* text;  ///< ImGui's buffer.
     std::string before; ///< The wrapped text before this frame's edit.
     float width;
+    bool select_all; ///< It has just become active, and what is typed shall take the place of all.
 };
 
 void rewrap(ImGuiInputTextCallbackData& data, const Editing& editing) {
@@ -70,6 +71,8 @@ int handle(ImGuiInputTextCallbackData* data) {
         }
         // An undone step stands as it was: breaking it anew would be a step that is undone next, for ever.
         if (!command(ImGuiKey_Z) && !command(ImGuiKey_Y)) rewrap(*data, editing);
+    } else if (editing.select_all) {
+        data->SelectAll();
     } else if (command(ImGuiKey_C) || command(ImGuiKey_Insert)) {
         copy_plain(*data);
     }
@@ -79,7 +82,8 @@ int handle(ImGuiInputTextCallbackData* data) {
 } // namespace
 
 std::optional<std::string> wrapped_area(Ui& ui, std::string_view id, std::string_view name,
-                                        const std::string& value, const Box& box, std::string_view hint) {
+                                        const std::string& value, const Box& box, EnterKey enter,
+                                        std::string_view hint) {
     const std::string key(id);
     const auto draft = ui.drafts.find(key);
     const float width = text_width(box.w);
@@ -93,11 +97,13 @@ std::optional<std::string> wrapped_area(Ui& ui, std::string_view id, std::string
         ImGui::SetKeyboardFocusHere();
         ui.focus_next.clear();
     }
-    Editing editing{&text, text, width};
-    ImGui::InputTextMultiline("##text", text.data(), text.capacity() + 1, {box.w, box.h},
-                              ImGuiInputTextFlags_CallbackResize | ImGuiInputTextFlags_CallbackEdit |
-                                  ImGuiInputTextFlags_CallbackAlways,
-                              handle, &editing);
+    const bool one = enter == EnterKey::finishes;
+    Editing editing{&text, text, width, one && draft == ui.drafts.end()};
+    const ImGuiInputTextFlags flags = ImGuiInputTextFlags_CallbackResize | ImGuiInputTextFlags_CallbackEdit |
+                                      ImGuiInputTextFlags_CallbackAlways |
+                                      (one ? ImGuiInputTextFlags_CtrlEnterForNewLine : 0);
+    ImGui::InputTextMultiline("##text", text.data(), text.capacity() + 1, {box.w, box.h}, flags, handle,
+                              &editing);
     ImGui::PopStyleVar();
     ImGui::PopFont();
     const bool active = ImGui::IsItemActive();
@@ -106,6 +112,7 @@ std::optional<std::string> wrapped_area(Ui& ui, std::string_view id, std::string
     ImGui::PopID();
 
     std::string plain = without_soft_breaks(text);
+    if (one) std::replace(plain.begin(), plain.end(), '\n', ' '); // Pasted ones.
     if (active)
         ui.drafts[key] = text;
     else

@@ -143,7 +143,7 @@ TEST_CASE("an edit that takes entries away is asked about first") {
     const std::string before = page.app().results_file();
     page.click("Drying");
     page.settle();
-    page.click("Delete Drying", "button");
+    page.click("Delete criterion", "button");
     page.settle();
     CHECK(page.find("This takes something away") != nullptr);
     page.click("Keep it as it is", "button");

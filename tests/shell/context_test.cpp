@@ -124,6 +124,10 @@ TEST_CASE("another density makes the fonts anew, in the same order") {
     CHECK(ImGui::GetIO().Fonts->IsBuilt());
     set_density(1);
     CHECK(font(Font::huge)->FontSize == before);
+    // The density it has costs nothing.
+    const unsigned char* atlas = ImGui::GetIO().Fonts->TexPixelsAlpha8;
+    set_density(1);
+    CHECK(ImGui::GetIO().Fonts->TexPixelsAlpha8 == atlas);
 }
 
 TEST_CASE("the context keeps no files, walks by keyboard and leaves window switching alone") {

@@ -283,7 +283,7 @@ TEST_CASE("solving: all scores 0 have no shares, and the first in the file comes
     CHECK(results.lead_points == 0);
 }
 
-TEST_CASE("solving: under a proportional curve a figure of 0 or less is missing, with a notice") {
+TEST_CASE("solving: under a proportional curve a figure of 0 or less is missing") {
     for (const char* better : {"more", "less"}) {
         const std::string criteria =
             R"({"id": "goal", "rate": "figure", "curve": {"kind": "proportional", "better": ")" +

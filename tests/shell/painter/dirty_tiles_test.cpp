@@ -180,6 +180,16 @@ TEST_CASE("whatever changes in a drawing, the frame is the one painted afresh") 
     CHECK(differing > 200);
 }
 
+TEST_CASE("a letter that becomes another in the same place is painted again") {
+    NewPainter painter;
+    for (const float texel : {4.0F, 5.0F}) {
+        DrawLists lists(width, height, 1);
+        lists.picture({70, 10}, {78, 20}, {texel, 3}, {texel + 8, 13}, 0xFFFFFFFF);
+        const std::int64_t all = std::int64_t{width} * height;
+        CHECK(area(painter.paint(lists.data(), width, height, ground)) == (texel < 5 ? all : 64 * 64));
+    }
+}
+
 TEST_CASE("a rectangle over whole tiles that changes its colour is painted again") {
     NewPainter painter;
     for (const ImU32 colour : {0xFF0000FFU, 0xFF00FF00U, 0xFF00FF01U}) {

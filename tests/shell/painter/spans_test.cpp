@@ -42,6 +42,22 @@ TEST_CASE("a side gives every row's first pixel exactly") {
     }
 }
 
+TEST_CASE("a side whose remainder comes out even steps over to the next pixel") {
+    // Found by search: in its third row the line lies a hair right of a pixel's centre, by the smallest step
+    // there is.
+    Corner top;
+    Corner bottom;
+    top.x = -940;
+    top.y = 211;
+    bottom.x = -2259;
+    bottom.y = 942;
+    Side side;
+    side.start(top, bottom, 1);
+    side.next_row();
+    side.next_row();
+    CHECK(side.pixel() == asked_one_by_one(top, bottom, 3));
+}
+
 TEST_CASE("the first pixel is the first whose centre is not before the place") {
     CHECK(first_pixel(0) == 0);
     CHECK(first_pixel(half_pixel) == 0);
