@@ -18,8 +18,8 @@ inline constexpr int font_count = 6;
 /// The font of the current context, for ImGui::PushFont.
 ImFont* font(Font which);
 
-/// What ImDrawList::AddText and ImFont::CalcTextSizeA take as its size: the height of the face's own line, in
-/// whole CSS pixels.
+/// What ImDrawList::AddText and ImFont::CalcTextSizeA take as its size: the height of the face's own line in
+/// CSS pixels, a whole number of device pixels. Any other size is stretched and blurred.
 float font_size(Font which);
 
 /// The size as CSS and WCAG count it, the em: Roboto's line is 2400/2048 of it.
@@ -27,8 +27,8 @@ constexpr float em_of(float size) {
     return size * 2048 / 2400;
 }
 
-/// Rasterises the fonts into the current context's atlas for a density (device pixels per CSS pixel, 0.5 to
-/// 8), in place of those there.
+/// Rasterises the fonts into the current context's atlas for a density (device pixels per CSS pixel), in
+/// place of those there.
 void build_fonts(float density);
 
 } // namespace steelyard

@@ -85,6 +85,8 @@ private:
         const Decision& d = desk.decision();
         if (find_node(d.criteria, id) != nullptr) {
             state_.node = id;
+            state_.reveal = id;
+            state_.reveal_in = 2;
             desk.ui.focus_next = frame::row_id(id);
         } else if (find_requirement(d, id) != nullptr) {
             state_.must = id;

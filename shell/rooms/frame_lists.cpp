@@ -192,7 +192,7 @@ float question_card(const Desk& desk, ImVec2 at, float width) {
     Column left{column.x, column.y, std::min(124.0f, (column.w - 12) / 2)};
     Column right{column.x + left.w + 12, column.y, column.w - left.w - 12};
     set_heading(desk, Heading::decide_by,
-                captioned_line(desk, left, "decide-by", "Decide by", d.decide_by, "year-month-day"));
+                captioned_line(desk, left, "decide-by", "Decide by", d.decide_by, "date"));
     set_heading(desk, Heading::author, captioned_line(desk, right, "author", "Author", d.author));
     column.y = left.y;
     return card.end(column.y - 8);

@@ -1,11 +1,9 @@
 #include <string>
 #include <utility>
-#include <vector>
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/frame_edits.hpp"
 #include "shell/rooms/frame_parts.hpp"
-#include "shell/sentences.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
 
@@ -35,11 +33,11 @@ std::string weight_sentence(const Desk& desk, const Node& node) {
 }
 
 void grades_part(const Desk& desk, Column& column, const Node& leaf) {
-    std::vector<std::string> names;
-    for (const auto& grade : leaf.grades) names.push_back(grade.name.empty() ? grade.id : grade.name);
-    remark(desk, column,
-           names.empty() ? "No grades yet: they are made in Gauge."
-                         : "The grades: " + listed(names, 6) + ". Named, and given their worth, in Gauge.");
+    std::string names;
+    for (const auto& grade : leaf.grades)
+        names += (names.empty() ? "" : " \xC2\xB7 ") + (grade.name.empty() ? grade.id : grade.name);
+    remark(desk, column, names.empty() ? "No grades yet." : "Grades: " + names);
+    remark(desk, column, "They are named, and given their worth, in Gauge.");
 }
 
 void figure_part(const Desk& desk, Column& column, const Node& leaf) {

@@ -20,6 +20,11 @@ struct State {
     Id node;
     bool settings_open = false;
 
+    /// The criterion whose opened panel is to be scrolled into sight, and in how many frames: what is opened
+    /// and closed moves the rest first.
+    Id reveal;
+    int reveal_in = 0;
+
     struct Paste {
         bool open = false;
         std::string text;

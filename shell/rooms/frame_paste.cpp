@@ -5,7 +5,6 @@
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/frame_edits.hpp"
 #include "shell/rooms/frame_parts.hpp"
-#include "shell/rooms/growing_card.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
@@ -17,6 +16,7 @@ namespace {
 constexpr std::string_view text_id = "paste-text";
 constexpr float row_height = 27;
 constexpr float step = 20;
+constexpr float enough_height = 480;
 constexpr float side_by_side = 620; ///< From this width on, text and preview stand beside each other.
 
 /// What a group's weights come from, beside its name.
@@ -111,7 +111,9 @@ void list_and_preview(const Desk& desk, const Box& box, const Outline& outline, 
     State::Paste& paste = desk.state.paste;
     ScrollArea scroll(desk.ui, "paste", box);
     const Box in = scroll.inner();
-    Column column{in.x, in.y, cards_width(box, in)};
+    // Where the box may be too low for all of it, the place of the scroll bar is kept free beforehand.
+    const float bar = box.h < enough_height ? ImGui::GetStyle().ScrollbarSize + 8 : 0.0f;
+    Column column{in.x, in.y, box.w - bar};
     draw_text(desk.ui, {column.x, column.y}, "Add a list of criteria", {.font = Font::heading});
     column.y += line_step(Font::heading) + 8;
     choices(desk, column, outline);

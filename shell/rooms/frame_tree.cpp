@@ -10,6 +10,7 @@
 #include "shell/rooms/frame_edits.hpp"
 #include "shell/rooms/frame_parts.hpp"
 #include "shell/rooms/growing_card.hpp"
+#include "shell/widgets/grid.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
 #include "shell/words.hpp"
@@ -27,7 +28,8 @@ std::string shown_name(const Node& node) {
 }
 
 /// How a criterion is weighed or rated, in a word or two.
-std::string kind_words(const Node& node) {
+std::string kind_words(const Node& node, const Node* parent) {
+    if (node.is_leaf() && parent == nullptr) return "no criteria yet";
     if (!node.is_leaf()) return node.weights == WeightsBy::points ? "by points" : "in pairs";
     switch (node.rate) {
     case RateBy::figure: return node.unit.empty() ? "figures" : node.unit;
@@ -78,7 +80,20 @@ void row_keys(const Desk& desk, const Node& node, const Node* parent) {
     }
 }
 
-void draw_row(const Desk& desk, const PlacedNode& placed, const Box& row) {
+/// Opens a criterion, or closes it if it is open. `panel_above`: the height of the panel that closes above
+/// it; the row shall stay where it was pressed.
+void open_or_close(const Desk& desk, const Id& node, float panel_above) {
+    if (desk.state.node == node) {
+        desk.state.node.clear();
+        return;
+    }
+    desk.state.node = node;
+    desk.state.reveal = node;
+    desk.state.reveal_in = 2;
+    if (panel_above > 0) ImGui::SetScrollY(ImGui::GetScrollY() - panel_above);
+}
+
+void draw_row(const Desk& desk, const PlacedNode& placed, const Box& row, float panel_above) {
     Ui& ui = desk.ui;
     const Node& node = *placed.node;
     const bool opened = desk.state.node == node.id;
@@ -97,7 +112,7 @@ void draw_row(const Desk& desk, const PlacedNode& placed, const Box& row) {
             desk.state.node = node.id;
             ui.focus_next = "node-name/" + node.id;
         } else {
-            desk.state.node = opened ? Id{} : node.id;
+            open_or_close(desk, node.id, panel_above);
         }
     }
 
@@ -108,7 +123,7 @@ void draw_row(const Desk& desk, const PlacedNode& placed, const Box& row) {
     const float small_y = row.y + (row.h - text_size(Font::small, name).y) / 2 + 1;
     const Box numbers = inside.take_right(weight_width, 6);
     draw_text(ui, {numbers.right(), y}, percent, {.font = face, .align = Align::right});
-    const std::string kind = kind_words(node);
+    const std::string kind = kind_words(node, placed.parent);
     const float kind_width = std::min(text_size(Font::small, kind).x, inside.w * 0.4f);
     const Box kinds = inside.take_right(kind_width, 10);
     draw_text(
@@ -143,6 +158,8 @@ void add_criterion(const Desk& desk, const Id& parent, std::size_t at) {
     node.name = "New criterion";
     node.id = node_id_for(desk.decision(), node.name);
     desk.state.node = node.id;
+    desk.state.reveal = node.id;
+    desk.state.reveal_in = 1;
     desk.ui.focus_next = "node-name/" + node.id;
     desk.actions.edit(AddNode{parent, std::move(node), at});
 }
@@ -156,11 +173,12 @@ float criteria_card(const Desk& desk, ImVec2 at, float width) {
     column.x -= 8; // The rows' ground reaches a little beyond their text.
     column.w += 16;
     std::vector<bool> lasts;
+    float panel_above = 0;
     for (const auto& placed : placed_nodes(desk.decision().criteria)) {
         const Box row = column.next(row_height, 0);
         lasts.resize(static_cast<std::size_t>(std::max(placed.depth - 2, 0)));
         if (placed.parent != nullptr) lasts.push_back(placed.node == &placed.parent->children.back());
-        draw_row(desk, placed, row);
+        draw_row(desk, placed, row, panel_above);
         draw_branches(desk, lasts, row);
         if (desk.state.node != placed.node->id) continue;
         const float begin = column.y;
@@ -169,7 +187,12 @@ float criteria_card(const Desk& desk, ImVec2 at, float width) {
         column.y = panel.y + 4;
         ImGui::GetWindowDrawList()->AddRect({column.x, begin - row_height}, {column.x + column.w, column.y},
                                             desk.look().brass, 8, 0, 1.5f);
+        if (desk.state.reveal == placed.node->id && --desk.state.reveal_in <= 0) {
+            scroll_into_sight({column.x, begin - row_height, column.w, column.y - begin + row_height}, 0, 0);
+            desk.state.reveal.clear();
+        }
         column.y += 6;
+        panel_above = column.y - begin;
     }
     column.x += 8;
     column.w -= 16;

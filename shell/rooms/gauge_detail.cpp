@@ -74,11 +74,14 @@ public:
     void draw(Box box) {
         const Card card(ui_, box);
         const auto local = row_.is_must() ? std::nullopt : local_worth(view_.results, row_.id, option_);
-        const std::string worth =
-            local && !local->stand_in ? "worth " + worth_text(local->worth) : std::string{};
+        std::string worth;
+        if (local && !local->nobody_known)
+            worth = (local->stand_in ? "counts as " : "worth ") + worth_text(local->worth);
         const Box inside =
-            card_title(ui_, box, option_name(view_.decision, option_) + " \xC2\xB7 " + row_.title, at_,
-                       in_play(view_.results, option_), worth);
+            card_title(ui_, box, option_name(view_.decision, option_) + " \xC2\xB7 " + row_.title,
+                       {.mark = at_,
+                        .in_play = in_play(view_.results, option_),
+                        .right = {worth, local && local->stand_in ? Tone::open : Tone::plain}});
         ScrollArea area(ui_, "gauge-detail", {inside.x - 4, inside.y - 4, inside.w + 8, inside.h + 8});
         const Box inner = area.inner();
         Form form(ui_, view_, actions_, {inner.x + 4, inner.y + 4, inner.w - 8, inside.h});
@@ -96,14 +99,17 @@ public:
         case RowKind::section: break;
         }
         ImGui::PopID();
-        if (local && local->stand_in)
-            form.sentence("Until it is known, " + option_name(view_.decision, option_) +
-                              " counts here with " + worth_text(local->worth) + ", the mean of the others.",
-                          Tone::open);
+        if (local && local->stand_in) form.sentence(stand_in_words(*local), Tone::open);
         area.reach(form.bottom());
     }
 
 private:
+    std::string stand_in_words(const LocalWorth& local) const {
+        if (local.nobody_known) return "As long as no option has a worth here, all of them count alike.";
+        return "Until its worth is known, " + option_name(view_.decision, option_) + " counts here as " +
+               worth_text(local.worth) + ", the mean of the others.";
+    }
+
     std::string name(const char* what) const { return std::string(what) + " of " + name_; }
 
     bool refused(const std::optional<double>& low, const std::optional<double>& value,

@@ -136,21 +136,18 @@ bool Form::press(std::string_view id, std::string_view label) {
     return button(ui_, id, label, box, ButtonKind::plain, !view_.read_only);
 }
 
-Box card_title(Ui& ui, Box card, std::string_view title, std::optional<std::size_t> mark, bool in_play,
-               std::string_view right) {
+Box card_title(Ui& ui, Box card, std::string_view title, const TitleLook& look) {
     Box inside = card.inset(16);
     const Box line = inside.take_top(24, 8);
     float x = line.x;
-    if (mark) {
-        option_mark(ui, {x, line.y + 1}, *mark, in_play);
+    if (look.mark) {
+        option_mark(ui, {x, line.y + 1}, *look.mark, look.in_play);
         x += 22 + 8;
     }
-    float end = line.right();
-    if (!right.empty()) {
-        const auto size =
-            draw_text(ui, {end, line.y + 2}, right, {.font = Font::strong, .align = Align::right});
-        end -= size.x + 12;
-    }
+    const ImVec2 right =
+        draw_text(ui, {line.right(), line.y + 2}, look.right.text,
+                  {.font = Font::strong, .ink = ink_of(ui.look(), look.right.tone), .align = Align::right});
+    const float end = line.right() - (right.x > 0 ? right.x + 12 : 0);
     draw_text(ui, {x, line.y + 2}, title,
               {.font = Font::strong, .ink = ui.look().quiet, .max_width = end - x});
     return inside;

@@ -71,9 +71,14 @@ private:
     float y_;
 };
 
-/// The title of a card, with an option's mark before it if there is one. Gives what is left of the card
-/// below.
-Box card_title(Ui& ui, Box card, std::string_view title, std::optional<std::size_t> mark = std::nullopt,
-               bool in_play = true, std::string_view right = {});
+/// What stands in the line of a card's title beside it.
+struct TitleLook {
+    std::optional<std::size_t> mark; ///< An option's, before the title.
+    bool in_play = true;             ///< That option takes part.
+    Words right;                     ///< At the right end.
+};
+
+/// The title of a card. Gives what is left of the card below.
+Box card_title(Ui& ui, Box card, std::string_view title, const TitleLook& look = {});
 
 } // namespace steelyard::gauge

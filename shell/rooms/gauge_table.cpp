@@ -178,6 +178,7 @@ private:
 
     void draw_heads() {
         clip({sight_.x, sight_.y + header_height, head_, sight_.h});
+        ImGui::PushTabStop(false); // The table is one stop for Tab, and the arrow keys reach every row.
         for (std::size_t r = 0; r < model_.rows.size(); ++r) {
             const Row& row = model_.rows[r];
             if (row.kind == RowKind::section || !in_sight(r)) continue;
@@ -197,6 +198,7 @@ private:
             draw_text(ui_, {box.x + padding, y + 1}, row.detail.text,
                       {.font = Font::small, .ink = ink_of(theme_, row.detail.tone), .max_width = width});
         }
+        ImGui::PopTabStop();
         ImGui::PopClipRect();
     }
 

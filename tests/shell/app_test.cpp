@@ -77,6 +77,8 @@ TEST_CASE("a file with the id of a kept decision does not overwrite it") {
     page.settle();
     std::vector<std::string> titles;
     for (const auto& kept : page.platform().kept) titles.push_back(read_decision(kept.text).decision->title);
+    for (const auto& kept : page.platform().kept)
+        UNSCOPED_INFO(kept.id << " " << kept.revision << " " << kept.title);
     CHECK(std::count(titles.begin(), titles.end(), "Kept") == 1);
     CHECK(std::count(titles.begin(), titles.end(), "From the file, changed") == 1);
 }
@@ -141,9 +143,9 @@ TEST_CASE("an edit that takes entries away is asked about first") {
     page.click("Frame", "tab");
     page.settle();
     const std::string before = page.app().results_file();
-    page.click("Drying");
+    page.click("More about option A", "button");
     page.settle();
-    page.click("Delete criterion", "button");
+    page.click("Delete option", "button");
     page.settle();
     CHECK(page.find("This takes something away") != nullptr);
     page.click("Keep it as it is", "button");

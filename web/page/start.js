@@ -93,8 +93,13 @@ async function start() {
         program.reduceMotion(lessMotion.matches);
         lessMotion.addEventListener('change', () => program.reduceMotion(lessMotion.matches));
 
-        // Both events: a reload or a closed tab may come without the first, a phone's switch of programs without the second.
-        window.addEventListener('pagehide', () => program.flush());
+        // A reload or a closed tab comes without `visibilitychange`, a phone's switch of programs with nothing else.
+        // The first comes earliest, but not everywhere.
+        window.addEventListener('beforeunload', () => program.flush());
+        window.addEventListener('pagehide', () => {
+            program.flush();
+            storage.linger();
+        });
         document.addEventListener('visibilitychange', () => {
             if (document.hidden) {
                 program.flush();

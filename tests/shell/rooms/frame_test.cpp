@@ -279,3 +279,18 @@ TEST_CASE("Frame: an empty decision is set up from nothing") {
     CHECK(d.criteria.children[1].name == "Delivery");
     CHECK(option_names(d) == std::vector<std::string>{"Ash"});
 }
+
+TEST_CASE("Frame: what is opened is scrolled into sight, and the row stays under the pointer") {
+    FramePage page(1366, 768);
+    page.click("Warranty", "treeitem");
+    const LedgerItem* remove = page.find("Delete criterion", "button");
+    REQUIRE(remove != nullptr);
+    CHECK(remove->at.y + remove->size.y <= remove->clip_max.y);
+
+    FramePage tall(1366, 900);
+    tall.click("Best washer for cell 7", "treeitem");
+    tall.wheel(Headless::middle(tall.item("Cleaning result", "treeitem")), 6);
+    const ImVec2 place = Headless::middle(tall.item("Fit to the cell", "treeitem"));
+    tall.click("Fit to the cell", "treeitem");
+    CHECK(Headless::middle(tall.item("Fit to the cell", "treeitem")).y == Catch::Approx(place.y).margin(1));
+}

@@ -238,6 +238,7 @@ TEST_CASE("what is no number is refused in words and can be put right") {
 TEST_CASE("a figure typed changes the ranking to what the solver says of the saved file") {
     GaugePage page;
     page.click("Residual dirt of Cove", "gridcell");
+    CHECK(page.says("counts as 0."));
     page.type("0.9");
     page.key(ImGuiKey_Enter);
     const Decision d = page.decision();
@@ -389,6 +390,7 @@ TEST_CASE("a leaf without a curve offers a line from the worst to the best quote
     page.open(d);
     page.click("Purchase price of Brook", "gridcell");
     CHECK(page.says("no curve yet"));
+    CHECK(page.says("As long as no option has a worth"));
     page.click("Less is better", "button");
     CHECK(std::get<LineCurve>(page.curve("price").shape) == LineCurve{82900, 65200});
 }
