@@ -7,6 +7,7 @@
 #include "core/decision/read.hpp"
 #include "core/results/write_results.hpp"
 #include "shell/app_state.hpp"
+#include "shell/context.hpp"
 #include "shell/example.hpp"
 
 namespace steelyard {
@@ -77,6 +78,7 @@ void App::draw() {
     ImGui::Begin("page", nullptr,
                  ImGuiWindowFlags_NoDecoration | ImGuiWindowFlags_NoMove | ImGuiWindowFlags_NoSavedSettings |
                      ImGuiWindowFlags_NoBringToFrontOnFocus | ImGuiWindowFlags_NoScrollWithMouse);
+    sharpen_edges();
     if (s.started) {
         Actions actions;
         const RoomView view = s.view();

@@ -1,6 +1,7 @@
 #include <algorithm>
 
 #include "shell/app_state.hpp"
+#include "shell/context.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
@@ -20,6 +21,7 @@ public:
         open_ = ImGui::BeginPopupModal(name, nullptr,
                                        ImGuiWindowFlags_NoDecoration | ImGuiWindowFlags_NoMove |
                                            ImGuiWindowFlags_NoSavedSettings);
+        if (open_) sharpen_edges();
         const ImVec2 at = ImGui::GetWindowPos();
         box_ = Box{at.x, at.y, size.x, size.y}.inset(22);
     }

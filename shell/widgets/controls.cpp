@@ -4,6 +4,7 @@
 
 #include <algorithm>
 
+#include "shell/context.hpp"
 #include "shell/widgets/text.hpp"
 
 namespace steelyard {
@@ -247,6 +248,7 @@ std::optional<std::size_t> drop_down(Ui& ui, std::string_view id, std::string_vi
     ImGui::SetNextWindowPos({x, above ? box.y - 4 - height : box.bottom() + 4});
     ImGui::SetNextWindowSize({width, height});
     if (ImGui::BeginPopup("list", ImGuiWindowFlags_NoMove)) {
+        sharpen_edges();
         const OnPaper paper(ui, theme.card);
         const bool before = ui.scrolling;
         ui.scrolling = true;

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 
+#include "shell/context.hpp"
 #include "shell/widgets/text.hpp"
 
 namespace steelyard {
@@ -19,6 +20,7 @@ ScrollArea::ScrollArea(Ui& ui, std::string_view id, const Box& box)
     ImGui::PushID(id.data(), id.data() + id.size());
     ImGui::BeginChild("area", {box.w, box.h}, ImGuiChildFlags_None,
                       ImGuiWindowFlags_NavFlattened | ImGuiWindowFlags_HorizontalScrollbar);
+    sharpen_edges();
     const ImVec2 origin = ImGui::GetCursorScreenPos();
     inner_ = {origin.x, origin.y, box.w, box.h};
     if (ImGui::GetScrollMaxY() > 0) inner_.w -= ImGui::GetStyle().ScrollbarSize;

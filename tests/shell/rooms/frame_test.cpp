@@ -289,7 +289,7 @@ TEST_CASE("Frame: what is opened is scrolled into sight, and the row stays under
 
     FramePage tall(1366, 900);
     tall.click("Best washer for cell 7", "treeitem");
-    tall.wheel(Headless::middle(tall.item("Cleaning result", "treeitem")), 6);
+    tall.wheel(Headless::middle(tall.item("Cleaning result", "treeitem")), 3);
     const ImVec2 place = Headless::middle(tall.item("Fit to the cell", "treeitem"));
     tall.click("Fit to the cell", "treeitem");
     CHECK(Headless::middle(tall.item("Fit to the cell", "treeitem")).y == Catch::Approx(place.y).margin(1));

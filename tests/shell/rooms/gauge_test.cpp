@@ -1,107 +1,16 @@
-#include <algorithm>
 #include <catch_amalgamated.hpp>
-#include <filesystem>
 
-#include "core/decision/lookup.hpp"
-#include "core/decision/read.hpp"
-#include "core/decision/write.hpp"
+#include <algorithm>
+
 #include "core/results/solve.hpp"
 #include "shell/rooms/gauge_entries.hpp"
 #include "shell/rooms/gauge_model.hpp"
-#include "tests/shell/support/headless.hpp"
-#include "tests/shell/support/ledger_checks.hpp"
-#include "tests/support/large_decision.hpp"
+#include "tests/shell/support/gauge_page.hpp"
 
 using namespace steelyard;
 using namespace steelyard::testing;
 using Catch::Matchers::ContainsSubstring;
 using Catch::Matchers::StartsWith;
-
-namespace {
-
-/// The example in the room Gauge, on a page so tall that nothing has to be scrolled.
-class GaugePage : public Headless {
-public:
-    explicit GaugePage(HeadlessOptions options = {.height = 2400}) : Headless(std::move(options)) {
-        settle();
-        click("Gauge", "tab");
-        settle();
-    }
-
-    void open(const Decision& decision) {
-        app().open_text("x.decision.json", write_decision(decision));
-        settle();
-        click("Gauge", "tab");
-    }
-
-    /// The decision as a file saved now would hold it.
-    Decision decision() {
-        key(ImGuiKey_S, ImGuiMod_Ctrl);
-        return *read_decision(platform().saved_files.back().text).decision;
-    }
-
-    std::string cell(const std::string& label) { return item(label, "gridcell").value; }
-    std::string focused() {
-        for (const LedgerItem& one : ledger().items()) {
-            if (one.focused) return one.label;
-        }
-        return {};
-    }
-
-    /// The figure that stands, in the file saved now.
-    Figure figure(const Id& criterion, const Id& option) {
-        const Decision d = decision();
-        const Figure* found = gauge::standing_figure(d, criterion, option);
-        return found != nullptr ? *found : Figure{};
-    }
-    /// The grade of a person, or the agreed one; empty if there is none.
-    Id grade(const Id& criterion, const Id& option, const Id& by) {
-        const Decision d = decision();
-        const GradeEntry* found = gauge::standing_grade(d, criterion, option, by);
-        return found != nullptr ? found->grade : Id{};
-    }
-    Curve curve(const Id& criterion) {
-        const Decision d = decision();
-        return find_node(d.criteria, criterion)->curve.value();
-    }
-    std::size_t entries() { return decision().figures.size(); }
-
-    void choose(const std::string& list, const std::string& label) {
-        click(list, "combobox");
-        click(label, "option");
-    }
-    void fill(const std::string& field, const std::string& text) {
-        click(field, "textbox");
-        key(ImGuiKey_A, ImGuiMod_Ctrl);
-        type(text);
-        key(ImGuiKey_Enter);
-    }
-    bool says(const std::string& part) {
-        for (const LedgerItem& one : ledger().items()) {
-            if (one.visible && one.label.find(part) != std::string::npos) return true;
-        }
-        return false;
-    }
-};
-
-/// The id of the cell that has the keyboard.
-std::string chosen_cell(const Headless& page) {
-    for (const LedgerItem& one : page.ledger().items()) {
-        if (one.focused && one.role == "gridcell") return one.id;
-    }
-    return {};
-}
-
-std::string file_name(std::string id) {
-    std::replace(id.begin(), id.end(), '/', '-');
-    return id;
-}
-
-const Node& leaf(const Decision& decision, const Id& id) {
-    return *find_node(decision.criteria, id);
-}
-
-} // namespace
 
 TEST_CASE("a number typed onto a cell is a new quote, and the one before stays as its history") {
     GaugePage page;
@@ -306,112 +215,6 @@ TEST_CASE("musts say in words how each option stands") {
     CHECK(solve(page.decision()).excluded.size() == 2);
 }
 
-TEST_CASE("a must with a value of its own is typed like a figure, its range in the card") {
-    GaugePage page;
-    Decision d = page.decision();
-    d.requirements.push_back({.id = "weight", .name = "Floor load", .unit = "t", .at_most = 6});
-    page.open(d);
-    page.click("Floor load of Brook", "gridcell");
-    CHECK(page.cell("Floor load of Brook") == "open");
-    page.type("5.5 t");
-    page.key(ImGuiKey_Enter);
-    CHECK(page.cell("Floor load of Brook") == "5.5, met");
-    page.click("Floor load of Brook", "gridcell");
-    page.fill("High end of Floor load of Brook", "6.5");
-    CHECK(page.cell("Floor load of Brook") == "5.5, up to 6.5, undecided");
-    page.fill("Low end of Floor load of Brook", "6");
-    CHECK(page.says("The low end cannot be above the value."));
-    CHECK_FALSE(gauge::standing_check(page.decision(), "weight", "brook")->low);
-}
-
-TEST_CASE("the card holds everything about a quote, and putting it right keeps the quote") {
-    GaugePage page;
-    page.click("Purchase price of Brook", "gridcell");
-    page.fill("Source of Purchase price of Brook", "offer BT-2216-3");
-    page.fill("Round of Purchase price of Brook", "3");
-    page.choose("Status of Purchase price of Brook", "spoken");
-    page.fill("High end of Purchase price of Brook", "76,000");
-    const Decision d = page.decision();
-    const Figure* now = gauge::standing_figure(d, "price", "brook");
-    CHECK(now->value == 73600);
-    CHECK(now->low == 72500);
-    CHECK(now->high == 76000);
-    CHECK(now->round == 3);
-    CHECK(now->status == QuoteStatus::spoken);
-    CHECK(now->source == "offer BT-2216-3");
-    // What was put right of round 3 is told once; rounds 2 and 1 were superseded.
-    CHECK(gauge::superseded(d, "price", "brook").size() == 2);
-
-    page.fill("Round of Purchase price of Brook", "2.5");
-    CHECK(page.says("A round is a whole number from 1."));
-    page.fill("Low end of Purchase price of Brook", "80,000");
-    CHECK(page.says("The low end cannot be above the value."));
-    CHECK(page.figure("price", "brook").low == 72500);
-    // Another value outside the range is another quote: the range does not hold for it.
-    page.fill("Value of Purchase price of Brook", "60000");
-    CHECK_FALSE(page.figure("price", "brook").low);
-}
-
-TEST_CASE("curves are chosen and their anchors typed") {
-    GaugePage page;
-    page.click("Purchase price of Brook", "gridcell");
-    page.fill("Figure worth nothing of Purchase price", "100,000");
-    CHECK(std::get<LineCurve>(page.curve("price").shape) == LineCurve{100000, 55000});
-    page.fill("Figure worth nothing of Purchase price", "55,000");
-    CHECK(page.says("The two ends of a line must differ."));
-    CHECK(std::get<LineCurve>(page.curve("price").shape) == LineCurve{100000, 55000});
-
-    page.choose("Kind of curve of Purchase price", "points");
-    CHECK(std::get<PointsCurve>(page.curve("price").shape).at ==
-          std::vector<std::array<double, 2>>{{55000, 1}, {100000, 0}});
-    page.click("Add a point", "button");
-    page.fill("Worth of point 2 of Purchase price", "0.8");
-    CHECK(std::get<PointsCurve>(page.curve("price").shape).at ==
-          std::vector<std::array<double, 2>>{{55000, 1}, {77500, 0.8}, {100000, 0}});
-    page.fill("Worth of point 2 of Purchase price", "2");
-    CHECK(page.says("A worth lies between 0 and 1."));
-    page.click("Remove point 2", "button");
-    CHECK(std::get<PointsCurve>(page.curve("price").shape).at.size() == 2);
-
-    page.choose("Kind of curve of Purchase price", "target");
-    CHECK(std::get<TargetCurve>(page.curve("price").shape) == TargetCurve{55000, 45000});
-    page.fill("Distance worth nothing of Purchase price", "0");
-    CHECK(page.says("must be above 0"));
-    page.choose("Kind of curve of Purchase price", "proportional");
-    CHECK(std::get<ProportionalCurve>(page.curve("price").shape) == ProportionalCurve{Better::less});
-    CHECK(page.item("Worth of Purchase price: less is better", "img").value.find("C at 65,200 is worth 1") !=
-          std::string::npos);
-}
-
-TEST_CASE("a leaf without a curve offers a line from the worst to the best quote") {
-    GaugePage page;
-    Decision d = page.decision();
-    find_node(d.criteria, "price")->curve.reset();
-    page.open(d);
-    page.click("Purchase price of Brook", "gridcell");
-    CHECK(page.says("no curve yet"));
-    CHECK(page.says("As long as no option has a worth"));
-    page.click("Less is better", "button");
-    CHECK(std::get<LineCurve>(page.curve("price").shape) == LineCurve{82900, 65200});
-}
-
-TEST_CASE("grades are added, named, given a worth and removed") {
-    GaugePage page;
-    page.click("Drying of Brook", "gridcell");
-    page.click("Add a grade", "button");
-    page.fill("Name of grade new grade", "dry outside only");
-    page.fill("Worth of grade dry outside only", "0.4");
-    page.fill("Worth of grade drops in some blind holes", "1.4");
-    CHECK(page.says("The worth of a grade lies between 0 and 1."));
-    Decision d = page.decision();
-    REQUIRE(leaf(d, "drying").grades.size() == 4);
-    CHECK(leaf(d, "drying").grades[3].name == "dry outside only");
-    CHECK(leaf(d, "drying").grades[3].worth == 0.4);
-    CHECK(leaf(d, "drying").grades[1].worth == 0.6);
-    page.click("Remove grade dry outside only", "button");
-    CHECK(leaf(page.decision(), "drying").grades.size() == 3);
-}
-
 TEST_CASE("criteria judged in pairs and weighed grades lead to Weigh") {
     GaugePage page;
     page.click("Ease of use of Brook", "gridcell");
@@ -421,14 +224,6 @@ TEST_CASE("criteria judged in pairs and weighed grades lead to Weigh") {
     page.click("Service of Brook", "gridcell");
     page.click("Weigh the grades in Weigh", "link");
     CHECK(page.item("Weigh", "tab").value == "true");
-}
-
-TEST_CASE("figures of a cost sheet show what they are made of and are not typed over") {
-    GaugePage page;
-    page.click("Running cost, 10 years of Cove", "gridcell");
-    CHECK(page.says("3,400 CHF a year"));
-    page.type("5");
-    CHECK(page.find("Running cost, 10 years of Cove", "textbox") == nullptr);
 }
 
 TEST_CASE("where another page writes, cells can be looked at only") {
@@ -456,44 +251,4 @@ TEST_CASE("without options or criteria the room says what is missing") {
     CHECK(page.says("There is no criterion yet"));
     page.click("Add criteria in Frame", "link");
     CHECK(page.item("Frame", "tab").value == "true");
-}
-
-TEST_CASE("every kind of row is drawn whole, and leaves its picture") {
-    const std::string folder = std::string(STEELYARD_SOURCE_DIR) + "/build/pictures";
-    std::filesystem::create_directories(folder);
-    struct Size {
-        int width;
-        int height;
-    };
-    for (const Size size : {Size{1280, 720}, Size{1366, 768}, Size{1920, 1080}, Size{640, 360}}) {
-        for (const bool dark : {false, true}) {
-            Headless page({.width = size.width, .height = size.height, .dark = dark});
-            page.settle();
-            page.click("Gauge", "tab");
-            page.click("Purchase price of Alder", "gridcell");
-            std::string before;
-            for (std::string row = chosen_cell(page); row != before; row = chosen_cell(page)) {
-                const std::string name = "Gauge-" + file_name(row) + "-" + std::to_string(size.width) + "x" +
-                                         std::to_string(size.height) + (dark ? "-dark" : "-light");
-                INFO(name);
-                page.save_png(folder + "/" + name + ".png");
-                CHECK(all_faults(page.ledger().items(), static_cast<float>(size.width),
-                                 static_cast<float>(size.height)) == Faults{});
-                before = row;
-                page.key(ImGuiKey_DownArrow);
-            }
-            CHECK(before == "must/agent/alder");
-        }
-    }
-}
-
-TEST_CASE("a large decision is drawn whole and quickly found through by keys") {
-    GaugePage page({.width = 1366, .height = 768});
-    page.open(large_decision());
-    CHECK(all_faults(page.ledger().items(), 1366, 768) == Faults{});
-    const std::string first = page.focused();
-    page.key(ImGuiKey_End, ImGuiMod_Ctrl);
-    page.key(ImGuiKey_End);
-    CHECK(page.focused() != first);
-    CHECK(all_faults(page.ledger().items(), 1366, 768) == Faults{});
 }
