@@ -14,6 +14,7 @@
 #include "core/decision/read.hpp"
 #include "core/results/solve.hpp"
 #include "core/results/write_results.hpp"
+#include "tests/support/bad_files.hpp"
 #include "tests/support/full_decision.hpp"
 #include "tests/support/round_trip.hpp"
 
@@ -248,6 +249,19 @@ TEST_CASE("command: an output that cannot be written is told by the exit code") 
 TEST_CASE("command: a refused file is refused though nothing could be written") {
     FullDisk full(0);
     CHECK(run_to(full, {"solve", "-"}, bad_file) == refused);
+}
+
+TEST_CASE("command: every kind of bad file ends in exit code 1, with each place on standard error") {
+    for (const auto& file : test::bad_files()) {
+        INFO(file.name);
+        const Ran ran = run({"check", "-"}, file.text);
+        CHECK(ran.code == refused);
+        CHECK(ran.out.empty());
+        for (const auto& place : file.at) {
+            CHECK_THAT(ran.err,
+                       ContainsSubstring(place.empty() ? "The file as a whole:" : "At " + place + ":"));
+        }
+    }
 }
 
 } // namespace steelyard
