@@ -55,6 +55,7 @@ void FileKeeper::tick(Session& session, double seconds) {
 }
 
 void FileKeeper::flush(Session& session) {
+    if (id_.empty()) return; // Nothing was opened yet: what there is now must not reach the store.
     if (session.revision() != stored_session_) store(session);
 }
 

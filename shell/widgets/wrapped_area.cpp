@@ -59,16 +59,22 @@ void copy_plain(const ImGuiInputTextCallbackData& data) {
     ImGui::SetClipboardText(without_soft_breaks(chosen).c_str());
 }
 
+/// The same for what was cut: it stood in the text before where the cursor is now.
+void cut_plain(const ImGuiInputTextCallbackData& data, std::string_view before) {
+    const auto left = static_cast<std::size_t>(data.BufTextLen);
+    if (left >= before.size()) return;
+    const std::string_view gone =
+        before.substr(static_cast<std::size_t>(data.CursorPos), before.size() - left);
+    ImGui::SetClipboardText(without_soft_breaks(gone).c_str());
+}
+
 int handle(ImGuiInputTextCallbackData* data) {
     auto& editing = *static_cast<Editing*>(data->UserData);
     if (data->EventFlag == ImGuiInputTextFlags_CallbackResize) {
         editing.text->resize(static_cast<std::size_t>(data->BufTextLen));
         data->Buf = editing.text->data();
     } else if (data->EventFlag == ImGuiInputTextFlags_CallbackEdit) {
-        if (command(ImGuiKey_X)) {
-            if (const char* cut = ImGui::GetClipboardText())
-                ImGui::SetClipboardText(without_soft_breaks(std::string(cut)).c_str());
-        }
+        if (command(ImGuiKey_X)) cut_plain(*data, editing.before);
         // An undone step stands as it was: breaking it anew would be a step that is undone next, for ever.
         if (!command(ImGuiKey_Z) && !command(ImGuiKey_Y)) rewrap(*data, editing);
     } else if (editing.select_all) {

@@ -76,9 +76,13 @@ TEST_CASE("a file with the id of a kept decision does not overwrite it") {
     page.wait(1);
     page.settle();
     std::vector<std::string> titles;
-    for (const auto& kept : page.platform().kept) titles.push_back(read_decision(kept.text).decision->title);
-    for (const auto& kept : page.platform().kept)
-        UNSCOPED_INFO(kept.id << " " << kept.revision << " " << kept.title);
+    for (const auto& kept : page.platform().kept) {
+        const ReadResult read = read_decision(kept.text);
+        INFO(kept.text);
+        REQUIRE(read.decision.has_value());
+        titles.push_back(read.decision->title);
+    }
+    CHECK(titles.size() == 2);
     CHECK(std::count(titles.begin(), titles.end(), "Kept") == 1);
     CHECK(std::count(titles.begin(), titles.end(), "From the file, changed") == 1);
 }
