@@ -15,6 +15,17 @@ const Id& example_id() {
     return id;
 }
 
+/// Rooms have no clock: an entry gets its time when it is carried out.
+void set_time(Edit& edit, const std::string& now) {
+    std::visit(
+        [&](auto& e) {
+            if constexpr (requires { e.entry.at; }) {
+                if (e.entry.at.empty()) e.entry.at = now;
+            }
+        },
+        edit);
+}
+
 } // namespace
 
 bool App::State::is_example() const {
@@ -164,7 +175,9 @@ void App::State::apply(Actions::Step step) {
         asked = AskedStep{std::move(step), sentence(applied.losses)};
         return;
     }
-    const auto outcome = session.apply(step.edits, stamp(), std::move(step.label));
+    const Stamp when = stamp();
+    for (auto& edit : step.edits) set_time(edit, when.at);
+    const auto outcome = session.apply(step.edits, when, std::move(step.label));
     if (!outcome.problems.empty()) message = sentence(outcome.problems.front());
     if (outcome.changed) {
         message.clear();
