@@ -126,8 +126,8 @@ EMSCRIPTEN_KEEPALIVE void app_open_file(const char* name, const char* bytes, int
 
 // ---- The page's surroundings ----
 
-EMSCRIPTEN_KEEPALIVE void app_flush(double now) {
-    guarded([&](Program& p) { p.flush(now); });
+EMSCRIPTEN_KEEPALIVE void app_flush(int leaving, double now) {
+    guarded([&](Program& p) { p.flush(leaving != 0, now); });
 }
 
 EMSCRIPTEN_KEEPALIVE void app_set_dark(int dark) {

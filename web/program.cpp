@@ -62,7 +62,7 @@ void Program::resize(int pixel_width, int pixel_height, float density) {
     painter_.set_atlas(alpha, width, height);
 }
 
-void Program::step(double now) {
+void Program::step(double now, bool finish_editing) {
     ImGuiIO& io = ImGui::GetIO();
     io.DisplaySize =
         ImVec2(static_cast<float>(pixel_width_) / density_, static_cast<float>(pixel_height_) / density_);
@@ -70,6 +70,8 @@ void Program::step(double now) {
     io.DeltaTime = static_cast<float>(std::clamp((now - last_step_) / 1000, shortest_step, longest_step));
     last_step_ = std::max(now, last_step_);
     ImGui::NewFrame();
+    // Between two frames this would lose that the field was edited.
+    if (finish_editing) ImGui::ClearActiveID();
     app_.draw();
     ImGui::Render();
     ++frames_;
@@ -201,8 +203,12 @@ void Program::paste(const std::string& text, double now) {
     }
 }
 
-void Program::flush(double now) {
+void Program::flush(bool leaving, double now) {
     settle(now);
+    if (leaving) {
+        step(now, true);
+        settle(now);
+    }
     app_.flush();
 }
 

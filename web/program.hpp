@@ -23,8 +23,9 @@ public:
     /// The picture's size in device pixels, and device pixels per CSS pixel.
     void resize(int pixel_width, int pixel_height, float density);
 
-    /// Lays out one frame; takes queued input. Paints nothing.
-    void step(double now);
+    /// Lays out one frame; takes queued input. Paints nothing. `finish_editing`: as if the person had left
+    /// the field he is in.
+    void step(double now, bool finish_editing = false);
 
     /// As many steps as the queued input needs, and what follows from it (a field that gets the focus) takes.
     void settle(double now);
@@ -53,8 +54,9 @@ public:
     const std::optional<std::string>& copy(bool cut, double now);
     void paste(const std::string& text, double now);
 
-    /// Stores what is not stored yet, the last key included.
-    void flush(double now);
+    /// Stores what is not stored yet, the last key included; `leaving`: a half-typed field or a drag counts
+    /// as finished.
+    void flush(bool leaving, double now);
 
     void reduce_motion(bool on);
 

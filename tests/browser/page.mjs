@@ -128,6 +128,14 @@ class SteelyardPage {
         return this.find({ label, value });
     }
 
+    /// The item like `wanted` that stands in the same line as another, for instance the button beside a name.
+    async findBeside(other, wanted) {
+        const { y, h } = await this.find(other);
+        const name = JSON.stringify(wanted) + ' beside ' + JSON.stringify(other);
+        const inLine = (item) => item.y < y + h && item.y + item.h > y;
+        return until('an item like ' + name, async () => (await this.all(wanted)).find(inLine));
+    }
+
     async value(label, role) {
         return (await this.find(role ? { label, role } : { label })).value;
     }
@@ -182,9 +190,24 @@ class SteelyardPage {
     /// Presses something that asks for a file, and gives it this one.
     async openFile(wanted, file) {
         const { x, y } = this.middle(await this.itemOf(wanted));
-        const [chooser] = await Promise.all([this.tab.waitForFileChooser(), this.tab.mouse.click(x, y)]);
+        const asked = this.tab.waitForFileChooser();
+        await this.tab.evaluate(() => 0); // the browser takes orders in turn: from here on it hands choosers over
+        await this.tab.mouse.click(x, y);
+        const chooser = await asked;
         await chooser.accept([file]);
         await this.idle();
+    }
+
+    /// Turns the wheel over something until an item comes into view, and gives it.
+    async scrollTo(wanted, over) {
+        for (let turns = 0; turns < 40; ++turns) {
+            const [found] = await this.all(wanted);
+            if (found) {
+                return found;
+            }
+            await this.wheel(over, 120);
+        }
+        return this.find(wanted);
     }
 
     // ---- The keyboard ----

@@ -42,8 +42,11 @@ function makeFiles(picker, program, view) {
         }
     });
 
-    // A download cannot overwrite, and browsers number equal names: the time tells them apart.
+    // A download cannot overwrite, and browsers number equal names: a date in it tells them apart.
     function datedName(name) {
+        if (/\d{4}-\d\d-\d\d/.test(name)) {
+            return name;
+        }
         const now = new Date();
         const two = (number) => String(number).padStart(2, '0');
         const date = [now.getFullYear(), two(now.getMonth() + 1), two(now.getDate())].join('-');

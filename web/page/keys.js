@@ -2,7 +2,7 @@
 
 // Keys the program uses by themselves, with Shift, and (those marked) with Ctrl.
 const ownKeys = new Map([
-    ['Tab', false], ['Enter', true], ['Escape', false], ['Backspace', true], ['Delete', true], ['F2', false],
+    ['Tab', false], ['Enter', true], ['Escape', false], ['Backspace', true], ['Delete', true], ['Insert', false], ['F2', false],
     ['ArrowLeft', true], ['ArrowRight', true], ['ArrowUp', true], ['ArrowDown', true],
     ['Home', true], ['End', true], ['PageUp', false], ['PageDown', false],
 ]);
@@ -38,14 +38,14 @@ function whoseKey(event, typing) {
     const shortcut = onMac ? event.metaKey && !ctrl : ctrl && !event.metaKey;
     if (ownKeys.has(event.key)) {
         if (alt) {
-            // Alt and left or right is the browser's way back and forward; on macOS it moves by words.
-            const own = event.key.startsWith('Arrow') && (onMac || /Up|Down/.test(event.key)) && !ctrl && !event.metaKey;
-            return own ? 'program' : 'browser';
+            // Moves things, and on macOS by words. The browser's way back by such a key would leave the program.
+            return event.key.startsWith('Arrow') && !ctrl && !event.metaKey ? 'program' : 'browser';
         }
         if (ctrl || event.metaKey) {
             return shortcut && ownKeys.get(event.key) ? 'program' : 'browser';
         }
-        return 'program';
+        // Shift and Insert pastes: the browser makes its own event of that.
+        return event.key === 'Insert' && event.shiftKey ? 'browser' : 'program';
     }
     if (shortcut && !alt) {
         const own = event.shiftKey ? ownShiftedShortcuts : ownShortcuts;

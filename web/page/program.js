@@ -127,7 +127,7 @@ function makeProgramCalls(module, stopped) {
         paste: (pasted) => withBytes([pasted], (t) => call('app_paste', t, now())),
         openFile: (name, bytes) => withBytes([name, bytes], (n, b) => call('app_open_file', n, b, bytes.length)),
 
-        flush: () => call('app_flush', now()),
+        flush: (leaving) => call('app_flush', leaving ? 1 : 0, now()),
         setDark: (dark) => call('app_set_dark', dark ? 1 : 0),
         reduceMotion: (on) => call('app_reduce_motion', on ? 1 : 0),
 

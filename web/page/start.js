@@ -95,14 +95,14 @@ async function start() {
 
         // A reload or a closed tab comes without `visibilitychange`, a phone's switch of programs with nothing else.
         // The first comes earliest, but not everywhere.
-        window.addEventListener('beforeunload', () => program.flush());
+        window.addEventListener('beforeunload', () => program.flush(true));
         window.addEventListener('pagehide', () => {
-            program.flush();
+            program.flush(true);
             storage.linger();
         });
         document.addEventListener('visibilitychange', () => {
             if (document.hidden) {
-                program.flush();
+                program.flush(false); // who looks something up elsewhere goes on typing when he is back
                 pointer.letGo();
                 focus.release();
                 view.pause();
