@@ -14,7 +14,7 @@ function builtPage(name) {
     return join(folder, name + '.html');
 }
 
-export const patience = 15000; // milliseconds; what is waited for takes a fraction of a second
+export const patience = 30000; // milliseconds; what is waited for takes a fraction of a second
 
 /// Waits for a value that counts as true, and gives it.
 export async function until(what, condition) {
