@@ -1,5 +1,5 @@
-// How a browser test is declared: `inEachBrowser('name', async (browser) => …)` runs once in Chromium and once in Firefox, in
-// a browser that the tests of one file share, each test in tabs of its own.
+// How a browser test is declared: `inEachBrowser('name', async (browser) => …)` runs once in Chromium and once in
+// Firefox, in a browser that the tests of one file share, each test in tabs of its own.
 
 import { after, before, describe, it } from 'node:test';
 
@@ -7,8 +7,8 @@ import { browserNames, startBrowser } from './browsers.mjs';
 import { openPage } from './page.mjs';
 
 /// `declare(test, browserName)`: test(name, action) declares a test; action gets `open`, which opens a page that is
-/// checked to have been quiet and closed after the test; `quiet: false` leaves the check out. Nothing is kept from one test
-/// to the next.
+/// checked to have been quiet and closed after the test; `quiet: false` leaves the check out. Nothing is kept from
+/// one test to the next.
 export function inEachBrowser(title, declare) {
     for (const name of browserNames) {
         describe(title + ' in ' + name, () => {

@@ -1,5 +1,5 @@
-// How long a frame takes and how few there are, on the release file. The times are printed; only the typical one is held to
-// its promise, since a shared machine may steal any single one.
+// How long a frame takes and how few there are, on the release file. The times are printed; only the typical one is
+// held to its promise, since a shared machine may steal any single one.
 
 import assert from 'node:assert/strict';
 

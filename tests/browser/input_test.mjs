@@ -203,7 +203,8 @@ inEachBrowser('input', (test, name) => {
         await page.tab.mouse.up();
     });
 
-    // Chromium's driver composes as an input method does; in Firefox the events are synthesised in that browser's order.
+    // Chromium's driver composes as an input method does; in Firefox the events are synthesised in that browser's
+    // order.
     test('a composed text arrives once', async (open) => {
         const page = await open({ path: probeFile });
         await page.click({ label: 'Title' });

@@ -1,5 +1,5 @@
-// The main job, done as a person does it, on the release file: from the example to a saved decision whose numbers the native
-// command confirms.
+// The main job, done as a person does it, on the release file: from the example to a saved decision whose numbers
+// the native command confirms.
 
 import assert from 'node:assert/strict';
 import { readFileSync } from 'node:fs';

@@ -19,9 +19,9 @@ function removeSavePicker() {
     delete window.showSaveFilePicker;
 }
 
-/// Options: path (the file; the built page), width, height, density (0: the browser's own window), before (functions that run in the page before its scripts,
-/// each a function or [function, argument]), savePicker (true keeps the dialog), waitForStart (false: not), context (tabs of one
-/// context share what is kept).
+/// Options: path (the file; the built page), width, height, density (0: the browser's own window), before
+/// (functions that run in the page before its scripts, each a function or [function, argument]), savePicker (true
+/// keeps the dialog), waitForStart (false: not), context (tabs of one context share what is kept).
 export async function openPage(browser, options = {}) {
     const tab = await (options.context ?? browser.puppeteer).newPage();
     const page = new SteelyardPage(browser, tab, pathToFileURL(options.path ?? pageFile).href);
@@ -81,7 +81,8 @@ class SteelyardPage {
         return this.tab.bringToFront();
     }
 
-    /// Nothing on the console, nothing against the policy, no request but the file itself. Call it at the end of every test.
+    /// Nothing on the console, nothing against the policy, no request but the file itself. Call it at the end of
+    /// every test.
     async assertQuiet() {
         const violations = await this.tab.evaluate(() => window.violations);
         assert.deepEqual(violations, [], 'the policy was violated');
@@ -212,7 +213,8 @@ class SteelyardPage {
 
     // ---- The keyboard ----
 
-    /// A key or several at once: 'Enter', 'Control+Z', 'Control+Shift+Z', 'Shift+Tab'. Names as in puppeteer's KeyInput.
+    /// A key or several at once: 'Enter', 'Control+Z', 'Control+Shift+Z', 'Shift+Tab'. Names as in puppeteer's
+    /// KeyInput.
     async press(keys) {
         const names = keys.split('+');
         const last = names.pop();

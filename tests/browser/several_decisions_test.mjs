@@ -1,4 +1,5 @@
-// On the release file: nothing that opens, starts or reloads loses another decision, and a store that refuses is no secret.
+// On the release file: nothing that opens, starts or reloads loses another decision, and a store that refuses is no
+// secret.
 
 import assert from 'node:assert/strict';
 

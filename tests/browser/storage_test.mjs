@@ -2,7 +2,7 @@
 
 import assert from 'node:assert/strict';
 
-import { probeFile } from './browsers.mjs';
+import { probeFile, until } from './browsers.mjs';
 import { inEachBrowser } from './each_browser.mjs';
 
 const withoutLocks = () => Object.defineProperty(Navigator.prototype, 'locks', { value: undefined });
@@ -52,6 +52,7 @@ inEachBrowser('keeping decisions', (test) => {
             await page.reload(); // the page saves 0.3 s after a change: not yet
         }
         assert.equal(await page.value('Title'), 'first second third');
+        assert.equal(page.lastDialog, undefined, 'what is on its way to the store is nothing to ask about');
     });
 
     test('a tab closed right after the last key loses nothing', async (open) => {
@@ -151,10 +152,12 @@ inEachBrowser('keeping decisions', (test) => {
             assert.match(await first.value('problem'), /taken this decision over/);
             assert.deepEqual(await inStore(first), [[1, 'ours'], [2, 'mine now']]);
 
-            // What it holds can be claimed back, and given up by closing the tab.
+            // A closed tab gives up its claim, some time after it is gone.
             await second.close();
-            await first.click({ label: 'Claim' });
-            await first.findValue('claim', 'granted');
+            await until('the claim', async () => {
+                await first.click({ label: 'Claim' });
+                return (await first.value('claim')) === 'granted';
+            });
         });
     }
 

@@ -1,6 +1,6 @@
-// One writer for each decision: a Web Lock by its id, held as long as the page lives or claims another. Where the browser has
-// no locks for this page, pages ask each other over a BroadcastChannel; where that fails too, every page is granted its claim
-// and the store's comparison of revisions is what is left.
+// One writer for each decision: a Web Lock by its id, held as long as the page lives or claims another. Where the
+// browser has no locks for this page, pages ask each other over a BroadcastChannel; where that fails too, every
+// page is granted its claim and the store's comparison of revisions is what is left.
 
 const answerTime = 250; // milliseconds that other pages have to say that they hold a decision
 
@@ -9,7 +9,8 @@ function makeClaims() {
     let ways = navigator.locks ? makeLocks() : makeChannel();
 
     function makeLocks() {
-        let held = null; // { id, release, released }
+        let held = null; // { release, released }
+        let latest = null; // the claim asked for last
         let ready = Promise.resolve(); // until the claim before is given up
 
         function giveUp() {
@@ -27,12 +28,13 @@ function makeClaims() {
                 answered = true;
                 done(granted);
             };
-            const mine = { id, release: null, released: null };
+            const mine = { release: null, released: null };
+            latest = mine;
             const options = takeOver ? { steal: true } : { ifAvailable: true };
             ready.then(() => {
-                const ended = navigator.locks.request('steelyard.decision.' + id, options, (lock) => {
-                    if (!lock) {
-                        answer(false);
+                const given = (lock) => {
+                    if (!lock || latest !== mine) {
+                        answer(false); // held elsewhere, or no longer wanted
                         return undefined;
                     }
                     held = mine;
@@ -41,7 +43,9 @@ function makeClaims() {
                     return new Promise((resolve) => {
                         mine.release = resolve;
                     });
-                });
+                };
+                const name = 'steelyard.decision.' + id;
+                const ended = Promise.resolve().then(() => navigator.locks.request(name, options, given));
                 mine.released = ended.catch((error) => {
                     if (!answered) {
                         // No locks for this page after all (a sandbox, a policy).

@@ -1,4 +1,5 @@
-// IndexedDB, opened when first needed. What comes from it is as untrusted as a file: on file:// other local pages may share it.
+// IndexedDB, opened when first needed. What comes from it is as untrusted as a file: on file:// other local pages
+// may share it.
 
 const databaseName = 'steelyard.decisions';
 const statesStore = 'states'; // key [id, revision]: { id, title, saved_at, revision, text }
@@ -86,8 +87,8 @@ function makeDatabase() {
         }
     }
 
-    // Runs `body(states, ask, complain)` in one transaction: `ask(request, answered)` watches over a request, `complain` sets a
-    // problem. Then exactly one call of `done(problem)`.
+    // Runs `body(states, ask, complain)` in one transaction: `ask(request, answered)` watches over a request,
+    // `complain` sets a problem. Then exactly one call of `done(problem)`.
     function transact(mode, body, done) {
         run(true);
 
@@ -148,7 +149,8 @@ function makeDatabase() {
             try {
                 body(transaction.objectStore(statesStore), ask, complain);
                 if (mode === 'readwrite') {
-                    // A page that is going away commits nothing by itself, and what is not committed blocks what follows.
+                    // A page that is going away commits nothing by itself, and what is not committed blocks what
+                    // follows.
                     transaction.commit();
                 }
             } catch (error) {

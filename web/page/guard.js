@@ -1,5 +1,6 @@
-// Its own script, in the oldest language, so that it runs where the program's script does not even parse. Shows the error box
-// for whatever reaches the window unhandled, and for the event 'steelyard-fault' that the program's script sends.
+// Its own script, in the oldest language, so that it runs where the program's script does not even parse. Shows the
+// error box for whatever reaches the window unhandled, and for the event 'steelyard-fault' that the program's
+// script sends.
 (function () {
     'use strict';
 

@@ -27,7 +27,8 @@ function shortcutLetter(event) {
     return place ? place[1].toLowerCase() : '';
 }
 
-// 'program': for the program alone. 'text': the program sees the key, the browser makes text of it. 'modifier'. 'browser'.
+// 'program': for the program alone. 'text': the program sees the key, the browser makes text of it. 'modifier'.
+// 'browser'.
 function whoseKey(event, typing) {
     if (modifierKeys.has(event.key)) {
         return 'modifier';

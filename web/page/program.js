@@ -1,6 +1,7 @@
 // The WebAssembly program: unpacked, started, and its exported functions as plain calls with strings in and out.
 
-// Everything the program needs came with these releases; none of the listed is newer than April 2023.
+// Exceptions and vectors in WebAssembly, DecompressionStream, a transaction's commit(): which release brought the
+// last of them is from memory of the vendors' release notes.
 const tooOld = 'Use a newer browser: Chrome or Edge 95, Firefox 113, Safari 16.4, or later.';
 
 function fromBase64(text) {
@@ -104,7 +105,7 @@ function makeProgramCalls(module, stopped) {
             return alive;
         },
         fail,
-        start: (mac) => call('app_start', now(), mac ? 1 : 0),
+        start: (mac) => call('app_start', now(), mac),
         load: () => call('app_load'),
         resize: (width, height, density) => call('app_resize', width, height, density),
         frame: () => call('app_frame', now()),
@@ -117,19 +118,19 @@ function makeProgramCalls(module, stopped) {
 
         pointer: (x, y, source) => call('app_pointer', x, y, source),
         pointerGone: () => call('app_pointer_gone'),
-        button: (which, down, source) => call('app_button', which, down ? 1 : 0, source, now()),
+        button: (which, down, source) => call('app_button', which, down, source, now()),
         wheel: (x, y) => call('app_wheel', x, y),
-        modifiers: (ctrl, shift, alt, meta) => call('app_modifiers', ctrl ? 1 : 0, shift ? 1 : 0, alt ? 1 : 0, meta ? 1 : 0),
-        key: (code, key, down) => withBytes([code, key], (c, k) => call('app_key', c, k, down ? 1 : 0)),
+        modifiers: (ctrl, shift, alt, meta) => call('app_modifiers', ctrl, shift, alt, meta),
+        key: (code, key, down) => withBytes([code, key], (c, k) => call('app_key', c, k, down)),
         text: (typed) => withBytes([typed], (t) => call('app_text', t)),
-        focus: (gained) => call('app_focus', gained ? 1 : 0),
-        copy: (cut) => text(call('app_copy', cut ? 1 : 0, now())),
+        focus: (gained) => call('app_focus', gained),
+        copy: (cut) => text(call('app_copy', cut, now())),
         paste: (pasted) => withBytes([pasted], (t) => call('app_paste', t, now())),
         openFile: (name, bytes) => withBytes([name, bytes], (n, b) => call('app_open_file', n, b, bytes.length)),
 
-        flush: (leaving) => call('app_flush', leaving ? 1 : 0, now()),
-        setDark: (dark) => call('app_set_dark', dark ? 1 : 0),
-        reduceMotion: (on) => call('app_reduce_motion', on ? 1 : 0),
+        flush: (leaving) => call('app_flush', leaving, now()),
+        setDark: (dark) => call('app_set_dark', dark),
+        reduceMotion: (on) => call('app_reduce_motion', on),
 
         items: () => text(call('app_items')) || '[]',
         results: () => text(call('app_results')) || '',
@@ -138,7 +139,7 @@ function makeProgramCalls(module, stopped) {
 
         answerSave: (request, outcome) =>
             withBytes([outcome.problem || ''], (p) =>
-                call('app_answer_save', request, outcome.saved ? 1 : 0, outcome.cancelled ? 1 : 0, p)
+                call('app_answer_save', request, outcome.saved, outcome.cancelled, p)
             ),
         answerList(request, entries, problem) {
             for (const entry of entries) {
@@ -156,6 +157,6 @@ function makeProgramCalls(module, stopped) {
                 call('app_answer_load', request, i, t, b, bytes.length, s, record.revision)
             );
         },
-        answerClaim: (request, granted) => call('app_answer_claim', request, granted ? 1 : 0),
+        answerClaim: (request, granted) => call('app_answer_claim', request, granted),
     };
 }

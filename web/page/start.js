@@ -10,7 +10,8 @@ async function start() {
     const storage = makeStorage(claims.isLost);
     let parts = null; // made once the program is there
 
-    // The program calls the host in the middle of a frame: what may call back comes after it, still in the person's event.
+    // The program calls the host in the middle of a frame: what may call back comes after it, still in the person's
+    // event.
     const later = (action) => Promise.resolve().then(action);
     const answered = (action) => {
         action();
@@ -19,7 +20,11 @@ async function start() {
     const saved = (request) => (problem) =>
         answered(() => parts.program.answerSave(request, { saved: !problem, problem }));
 
-    const askBeforeLeaving = (event) => event.preventDefault();
+    const askBeforeLeaving = (event) => {
+        if (!storage.underway()) {
+            event.preventDefault();
+        }
+    };
     const host = {
         failed: (problem) => parts.program.fail(new Error(problem)),
         saveFile: (request, name, mediaType, text) =>

@@ -18,8 +18,10 @@ function soundState(state) {
 function makeStorage(isLost) {
     const database = makeDatabase();
     let storing = 0;
+    let answers = false; // the last thing asked of the store went well
 
-    // Walks from the last key down. `take(state)` says where to go on: at the next key, at another one, or nowhere (null).
+    // Walks from the last key down. `take(state)` says where to go on: at the next key, at another one, or nowhere
+    // (null).
     function walk(states, range, ask, take) {
         ask(states.openCursor(range, 'prev'), (cursor) => {
             const next = cursor ? take(cursor.value, cursor.key) : null;
@@ -43,6 +45,7 @@ function makeStorage(isLost) {
                     return [id]; // before all its states: on to the next decision
                 }),
             (problem) => {
+                answers = !problem;
                 found.sort((a, b) => (a.saved_at < b.saved_at ? 1 : a.saved_at > b.saved_at ? -1 : 0));
                 done(problem, problem ? [] : found);
             }
@@ -63,9 +66,10 @@ function makeStorage(isLost) {
         );
     }
 
-    // Everything is asked for at once: a page that is going away hears no answer any more. A state is added, never replaced:
-    // where another page has stored this revision, the store itself refuses, whatever the browser then makes of the rest (one
-    // aborts, one commits). Where another page is so far ahead that it has removed this revision again, the newest key tells.
+    // Everything is asked for at once: a page that is going away hears no answer any more. A state is added, never
+    // replaced: where another page has stored this revision, the store itself refuses, whatever the browser then
+    // makes of the rest (one aborts, one commits). Where another page is so far ahead that it has removed this
+    // revision again, the newest key tells.
     function store(record, done) {
         const { id, revision } = record;
         if (isLost(id)) {
@@ -86,13 +90,19 @@ function makeStorage(isLost) {
             },
             (problem) => {
                 --storing;
+                answers = !problem;
                 done(problem);
             }
         );
     }
 
-    // Chromium may drop what a page hands it while going away: measured at one in five reloads, at none in 60 when the page
-    // stayed this much longer. Waits only while something is on its way.
+    // A state is with the browser, and there is no reason to think that it will be refused.
+    function underway() {
+        return storing > 0 && answers;
+    }
+
+    // Chromium may drop what a page hands it while going away: measured at one in five reloads, at none in 60 when
+    // the page stayed this much longer. Waits only while something is on its way.
     function linger() {
         const end = performance.now() + (storing > 0 ? lingerTime : 0);
         while (performance.now() < end) {
@@ -104,5 +114,5 @@ function makeStorage(isLost) {
         database.transact('readwrite', (states, ask) => ask(states.delete(keysOf(id))), done);
     }
 
-    return { list, load, store, forget, linger };
+    return { list, load, store, forget, underway, linger };
 }

@@ -1,9 +1,9 @@
-// Text and the clipboard. Text comes from a real field that stands, unseen, at the caret: so dead keys, input methods and
-// phone keyboards work.
+// Text and the clipboard. Text comes from a real field that stands, unseen, at the caret: so dead keys, input
+// methods and phone keyboards work.
 
 function listenToTyping(field, program, view, focus, keys) {
-    // A composition ends with `input` before `compositionend` in one browser and after it in another: both come here, and
-    // the second finds nothing.
+    // A composition ends with `input` before `compositionend` in one browser and after it in another: both come
+    // here, and the second finds nothing.
     function harvest() {
         const typed = field.value;
         field.value = '';

@@ -1,6 +1,8 @@
-// The picture: its size in device pixels, and when it is drawn. A frame is drawn only for a reason, and none while hidden.
+// The picture: its size in device pixels, and when it is drawn. A frame is drawn only for a reason, and none while
+// hidden.
 
-// Beyond this the picture is coarser than the screen: painting and copying more would be felt (5120 x 2880 is below it).
+// Beyond this the picture is coarser than the screen: painting and copying more would be felt (5120 x 2880 is below
+// it).
 const mostPixels = 16000000;
 
 // Input may lead to a second frame (something opens) and a third (it knows its size).
@@ -107,8 +109,8 @@ function makeView(canvas, program) {
         let density = window.devicePixelRatio;
         let width = Math.round(entry.contentRect.width * density);
         let height = Math.round(entry.contentRect.height * density);
-        // The browser's own count is exact where a pixel is cut by the window's edge. Where a density is only played (by
-        // developer tools) it is that of the real screen: not to be used.
+        // The browser's own count is exact where a pixel is cut by the window's edge. Where a density is only
+        // played (by developer tools) it is that of the real screen: not to be used.
         if (box && Math.abs(box.inlineSize - width) <= 2 && Math.abs(box.blockSize - height) <= 2) {
             width = box.inlineSize;
             height = box.blockSize;
