@@ -34,7 +34,9 @@ bool App::State::is_example() const {
 
 RoomView App::State::view() {
     if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
-    return {session.decision(), session.results(), person, keeper.read_only()};
+    const bool examined = examination && examined_revision == session.revision();
+    return {session.decision(), session.results(), person,
+            keeper.read_only(), answering,         examined ? &examination->found() : nullptr};
 }
 
 void App::State::open(Decision decision, const std::string& key, std::uint64_t stored_revision,
@@ -158,6 +160,7 @@ void App::State::save_results() {
 void App::State::carry_out(Actions& actions) {
     if (!actions.message.empty()) message = std::move(actions.message);
     if (actions.answers.wanted) person = actions.answers.person;
+    if (actions.answering) answering = *actions.answering;
     if (!actions.to_copy.empty()) platform.copy_text(actions.to_copy);
     for (auto& step : actions.steps) apply(std::move(step));
     if (actions.go_to.wanted) {
@@ -165,6 +168,26 @@ void App::State::carry_out(Actions& actions) {
         if (!actions.go_to.focus.empty()) rooms[static_cast<std::size_t>(room)]->show(actions.go_to.focus);
         fresh_frames = 2;
     }
+    examine(actions.to_examine);
+}
+
+void App::State::examine(const Actions::Examined& wish) {
+    if (!wish.wanted) {
+        examination.reset();
+        return;
+    }
+    const bool same = examination && examined_revision == session.revision() &&
+                      examination->found().set == wish.set && examination->found().by == wish.by;
+    if (!same) {
+        examination.emplace(session.decision(), session.results(), wish.set, wish.by);
+        examined_revision = session.revision();
+    }
+    // A frame has 16 ms; drawing takes less than half of it.
+    constexpr double budget = 6;
+    const double begun = platform.milliseconds();
+    while (!examination->found().finished && platform.milliseconds() - begun < budget) examination->step();
+    if (!examination->found().finished) fresh_frames = 2;
+    if (!same) fresh_frames = 2;
 }
 
 void App::State::apply(Actions::Step step) {

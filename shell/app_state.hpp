@@ -36,6 +36,9 @@ struct App::State {
     std::array<std::unique_ptr<Room>, 6> rooms;
     RoomId room = RoomId::frame;
     Id person; ///< Who answers now; empty: agreed in the room.
+    Answering answering = Answering::agreed;
+    std::optional<ExaminationJob> examination;
+    std::uint64_t examined_revision = 0;
     bool started = false;
     bool standing_open = false; ///< On narrow pages: the standing is laid over the room.
 
@@ -60,6 +63,7 @@ struct App::State {
     void save_file();
     void save_results();
     void carry_out(Actions& actions);
+    void examine(const Actions::Examined& wish);
     void apply(Actions::Step step);
     void undo();
     void redo();

@@ -40,8 +40,9 @@ class Platform {
 public:
     virtual ~Platform() = default;
 
-    virtual std::string now() = 0;    ///< ISO 8601, UTC, whole seconds: 2026-12-01T09:30:00Z.
-    virtual std::string new_id() = 0; ///< A random UUID (RFC 9562, version 4).
+    virtual std::string now() = 0;     ///< ISO 8601, UTC, whole seconds: 2026-12-01T09:30:00Z.
+    virtual double milliseconds() = 0; ///< Of a clock that only runs forward, to keep slices of work short.
+    virtual std::string new_id() = 0;  ///< A random UUID (RFC 9562, version 4).
 
     /// Saves a text to a file the person chooses, or downloads it under `name`.
     virtual void save_file(const std::string& name, const std::string& media_type, const std::string& text,

@@ -1,5 +1,7 @@
 #include "web/browser_platform.hpp"
 
+#include <emscripten.h>
+
 #include <array>
 #include <ctime>
 #include <utility>
@@ -33,6 +35,10 @@ std::string BrowserPlatform::now() {
     std::array<char, 32> text{};
     const std::size_t length = std::strftime(text.data(), text.size(), "%Y-%m-%dT%H:%M:%SZ", &utc);
     return std::string(text.data(), length);
+}
+
+double BrowserPlatform::milliseconds() {
+    return emscripten_get_now();
 }
 
 std::string BrowserPlatform::new_id() {

@@ -11,6 +11,7 @@ namespace steelyard {
 class BrowserPlatform : public Platform {
 public:
     std::string now() override;
+    double milliseconds() override;
     std::string new_id() override;
 
     void save_file(const std::string& name, const std::string& media_type, const std::string& text,

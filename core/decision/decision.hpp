@@ -137,6 +137,8 @@ struct Judgment {
     Id a;
     Id b;
     double ratio = 1;
+    std::string a_range; ///< What was at stake on a and b when it was judged, as it stood under the arm.
+    std::string b_range;
     std::string note;
     std::string at;
     Extras extras;

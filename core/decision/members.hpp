@@ -74,6 +74,8 @@ void members(V& v, Like<Judgment> auto& j) {
     v.id("a", j.a);
     v.id("b", j.b);
     v.number("ratio", j.ratio);
+    v.text("a_range", j.a_range);
+    v.text("b_range", j.b_range);
     v.text("note", j.note);
     v.text("at", j.at);
 }

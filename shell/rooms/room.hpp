@@ -2,11 +2,13 @@
 
 #include <functional>
 #include <memory>
+#include <optional>
 #include <string>
 #include <string_view>
 #include <vector>
 
 #include "core/decision/edit.hpp"
+#include "core/results/examination.hpp"
 #include "core/results/results.hpp"
 #include "shell/ui.hpp"
 
@@ -14,12 +16,18 @@ namespace steelyard {
 
 enum class RoomId { frame, weigh, gauge, standing, tipping, record };
 
+/// How a group answers: in one voice; each alone, unseen by the others until all is revealed; or by a show of
+/// hands that one person types.
+enum class Answering { agreed, alone, hands };
+
 /// What a room may read.
 struct RoomView {
     const Decision& decision;
     const Results& results;
     Id person;              ///< Who answers now; empty: agreed in the room.
     bool read_only = false; ///< Another page writes this decision; controls that edit are disabled.
+    Answering answering = Answering::agreed;
+    const Examination* examination = nullptr; ///< Of the set asked for by Actions::examine, as far as it is.
 };
 
 /// What a room asks for. Carried out after the frame.
@@ -35,6 +43,11 @@ public:
     void go(RoomId room, Id focus = {}) { go_to = {room, std::move(focus), true}; }
     void copy(std::string text) { to_copy = std::move(text); }
     void answer_as(Id person) { answers = {std::move(person), true}; }
+    void answer_by(Answering way) { answering = way; }
+
+    /// Looks into the answers of `by` (empty: the group) in a set, a slice in each frame, as long as it is
+    /// asked for in every frame; what is found stands in RoomView::examination.
+    void examine(Id set, Id by) { to_examine = {std::move(set), std::move(by), true}; }
     void say(std::string text) { message = std::move(text); }
 
     struct Step {
@@ -46,13 +59,20 @@ public:
         Id focus;
         bool wanted = false;
     };
-    struct Answering {
+    struct Answers {
         Id person;
+        bool wanted = false;
+    };
+    struct Examined {
+        Id set;
+        Id by;
         bool wanted = false;
     };
     std::vector<Step> steps;
     Destination go_to;
-    Answering answers;
+    Answers answers;
+    std::optional<Answering> answering;
+    Examined to_examine;
     std::string to_copy;
     std::string message;
 };

@@ -1,7 +1,10 @@
 #include <algorithm>
 
 #include "core/decision/lookup.hpp"
-#include "shell/rooms/weigh_cards.hpp"
+#include "shell/rooms/weigh_grid.hpp"
+#include "shell/rooms/weigh_hold.hpp"
+#include "shell/rooms/weigh_points.hpp"
+#include "shell/rooms/weigh_sets.hpp"
 #include "shell/widgets/arm.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
@@ -41,9 +44,16 @@ public:
 
     void show(const Id& set) override { set_ = set; }
 
+    bool paste(const std::string& text, const RoomView& view, Actions& actions) override {
+        return grid_.paste(text, view, actions, set_);
+    }
+
     void reset() override {
         set_.clear();
         pair_ = {};
+        grid_.reset();
+        hold_.reset();
+        points_.reset();
     }
 
 private:
@@ -124,7 +134,7 @@ private:
             if (const auto set = draw_set_list(ui, view, set_, list)) set_ = *set;
         }
         if (entry.from_points) {
-            draw_points(ui, view, entry, actions, area);
+            points_.draw(ui, view, actions, entry, area);
             return;
         }
         Box arm = area.take_top(std::clamp(area.h * 0.52f, 300.0f, 420.0f), 12);
@@ -140,8 +150,8 @@ private:
             grid = below.take_left(std::clamp(side, below.w * 0.42f, below.w * 0.52f), 12);
             words = below;
         }
-        if (const auto pair = draw_grid(ui, view, entry, pair_, grid)) pick(ui, *pair);
-        if (const auto pair = draw_consistency(ui, view, entry, words)) pick(ui, *pair);
+        if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, grid)) pick(ui, *pair);
+        if (const auto pair = hold_.draw(ui, view, actions, entry, words)) pick(ui, *pair);
     }
 
     void pick(Ui& ui, const ItemPair& pair) {
@@ -255,6 +265,9 @@ private:
                   {.font = Font::small, .ink = theme.quiet, .max_width = foot.w, .align = Align::centre});
     }
 
+    PairGrid grid_;
+    HoldCard hold_;
+    PointsCard points_;
     Id set_;
     Id shown_set_; ///< The set the pair belongs to.
     ItemPair pair_;

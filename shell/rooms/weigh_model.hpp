@@ -1,5 +1,6 @@
 #pragma once
 
+#include <array>
 #include <optional>
 #include <string>
 #include <vector>
@@ -8,6 +9,9 @@
 
 /// What the room Weigh reads out of a decision and its results. No drawing.
 namespace steelyard {
+
+/// A pair of items of a set.
+using ItemPair = std::array<Id, 2>;
 
 /// The entry of a set that is shown to `person`: his own where he takes part, else the group's.
 const SetResult* shown_entry(const Results& results, const Id& set, const Id& person);

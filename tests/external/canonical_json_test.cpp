@@ -236,7 +236,7 @@ TEST_CASE("canonical JSON: the hash of a decision is that of its file without th
     const ReadResult result = read_decision(test::full_decision_text());
     REQUIRE(result.decision);
     CHECK(decision_sha256(*result.decision) ==
-          "450e09ba225bb5bf4362bdeefcad3cbc4442ef2b7208df9ec88284989ba1d67d");
+          "6651c4bb7cce74a7670efe640c98fd8c7e502b456f00b4a2c007317688825c01");
 }
 
 } // namespace steelyard

@@ -50,7 +50,7 @@ const std::string& full_decision_text() {
     ]
   },
   "judgments": [
-    {"set": "goal", "by": "p1", "a": "cost", "b": "ease", "ratio": 3, "note": "said twice", "at": "2026-12-01T09:30:00Z"},
+    {"set": "goal", "by": "p1", "a": "cost", "b": "ease", "ratio": 3, "a_range": "400 to 900 EUR", "b_range": "low to high", "note": "said twice", "at": "2026-12-01T09:30:00Z"},
     {"set": "ease", "by": "p2", "a": "o1", "b": "o2", "ratio": 0.25},
     {"set": "care", "by": null, "a": "k1", "b": "k2", "ratio": 2}
   ],

@@ -1,6 +1,7 @@
 #include "tests/shell/support/fake_platform.hpp"
 
 #include <algorithm>
+#include <chrono>
 #include <cstdio>
 #include <utility>
 
@@ -35,6 +36,11 @@ std::string FakePlatform::now() {
     std::snprintf(text, sizeof text, "2026-12-%02dT%02d:%02d:%02dZ", 1 + passed / 86400, passed / 3600 % 24,
                   passed / 60 % 60, passed % 60);
     return text;
+}
+
+double FakePlatform::milliseconds() {
+    const auto since = std::chrono::steady_clock::now().time_since_epoch();
+    return std::chrono::duration<double, std::milli>(since).count();
 }
 
 std::string FakePlatform::new_id() {

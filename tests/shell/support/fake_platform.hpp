@@ -51,6 +51,7 @@ public:
     void answer();
 
     std::string now() override;
+    double milliseconds() override;
     std::string new_id() override;
     void save_file(const std::string& name, const std::string& media_type, const std::string& text,
                    std::function<void(SaveOutcome)> done) override;
