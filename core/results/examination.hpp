@@ -28,6 +28,8 @@ struct CorrectionChoice {
 struct PairCorrection {
     Id a;
     Id b;
+    Id said_by; ///< Whose judgment stands there: a person's, or empty for an agreed one. Void for a mean of
+                ///< several.
     double given = 1;
     std::optional<double> implied; ///< What the other answers say; none where the set falls apart without it.
     std::optional<double> best;    ///< The value that gives the least CR with the others held.
@@ -41,6 +43,7 @@ struct FewestCorrections {
     struct Change {
         Id a;
         Id b;
+        Id said_by;
         double given = 1;
         double to = 1;
     };
