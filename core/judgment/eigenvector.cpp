@@ -1,15 +1,12 @@
-// Glossary: A the matrix, lambda its principal eigenvalue, w the right and v the left eigenvector with v'w =
-// 1, x_p = ln a_ij the logarithm of missing entry p = (i, j), G the reduced resolvent of A at lambda.
 #include "core/judgment/eigenvector.hpp"
 
-#include <Eigen/Cholesky>
 #include <Eigen/LU>
 #include <algorithm>
 #include <cassert>
 #include <cmath>
 #include <utility>
-#include <vector>
 
+#include "core/judgment/least_lambda.hpp"
 #include "core/judgment/weights.hpp"
 
 namespace steelyard {
@@ -82,119 +79,22 @@ PrincipalPair principal_eigenvector(const MatrixXd& a, const PrincipalPair* star
     return p;
 }
 
-namespace {
-
-/// At the optimum each missing entry is s_i / s_j with s_i = sqrt(w_i / v_i), since there v_i a_ij w_j = v_j
-/// a_ji w_i. So the search needs only the n logarithms y = ln s, however many pairs are missing: lambda is
-/// convex in them too.
-void fill_missing(MatrixXd& a, const std::vector<PairMatrix::Pair>& missing, const VectorXd& y) {
-    for (const auto& [p, q] : missing) {
-        const auto i = static_cast<Index>(p);
-        const auto j = static_cast<Index>(q);
-        a(i, j) = std::exp(y(i) - y(j));
-        a(j, i) = std::exp(y(j) - y(i));
-    }
-}
-
-/// Newton's step for lambda in y, from the derivatives of algebraically simple eigenvalues.
-VectorXd newton_step(const MatrixXd& a, const std::vector<PairMatrix::Pair>& missing,
-                     const PrincipalPair& principal, double& steepest) {
-    const Index n = a.rows();
-    const VectorXd& w = principal.right;
-    const VectorXd& v = principal.left;
-    VectorXd gradient = VectorXd::Zero(n);
-    MatrixXd hessian = MatrixXd::Zero(n, n);
-    MatrixXd columns = MatrixXd::Zero(n, n); // (dA/dy_k) w, column k
-    MatrixXd rows = MatrixXd::Zero(n, n);    // (dA/dy_k)' v, column k
-    steepest = 0;
-    for (const auto& [p, q] : missing) {
-        const auto i = static_cast<Index>(p);
-        const auto j = static_cast<Index>(q);
-        const double forth = v(i) * a(i, j) * w(j);
-        const double back = v(j) * a(j, i) * w(i);
-        steepest = std::max(steepest, std::abs(forth - back));
-        gradient(i) += forth - back;
-        gradient(j) -= forth - back;
-        hessian(i, i) += forth + back;
-        hessian(j, j) += forth + back;
-        hessian(i, j) -= forth + back;
-        hessian(j, i) -= forth + back;
-        columns(i, i) += a(i, j) * w(j);
-        columns(i, j) -= a(i, j) * w(j);
-        columns(j, i) -= a(j, i) * w(i);
-        columns(j, j) += a(j, i) * w(i);
-        rows(j, i) += v(i) * a(i, j);
-        rows(j, j) -= v(i) * a(i, j);
-        rows(i, i) -= v(j) * a(j, i);
-        rows(i, j) += v(j) * a(j, i);
-    }
-    // G = (lambda I - A + w v')^-1 - w v' is the reduced resolvent; second derivatives are Y'GX + (Y'GX)'.
-    const MatrixXd shifted = principal.lambda * MatrixXd::Identity(n, n) - a + w * v.transpose();
-    const MatrixXd solved = shifted.partialPivLu().solve(columns) - w * (v.transpose() * columns);
-    const MatrixXd cross = rows.transpose() * solved;
-    hessian += cross + cross.transpose();
-    // Adding the same to y wherever pairs are missing changes nothing: a ridge takes that freedom out of the
-    // system. It is far below the curvature, and Newton's next step corrects what it costs.
-    hessian.diagonal().array() += 1e-12 * hessian.diagonal().cwiseAbs().maxCoeff();
-    return -hessian.ldlt().solve(gradient);
-}
-
-} // namespace
-
-Completion complete_optimally(const PairMatrix& pairs) {
+Completion complete_optimally(const PairMatrix& pairs, const PrincipalPair* start) {
     const auto n = static_cast<Index>(pairs.size());
-    const auto missing = pairs.missing();
     MatrixXd a(n, n);
     for (Index i = 0; i < n; ++i) {
         for (Index j = 0; j < n; ++j)
             a(i, j) = pairs.at(static_cast<std::size_t>(i), static_cast<std::size_t>(j));
     }
-    if (missing.empty()) {
-        PrincipalPair p = principal_eigenvector(a);
+    const FreePairs free{pairs.missing(), {}};
+    if (free.missing.empty()) {
+        PrincipalPair p = principal_eigenvector(a, start);
         return {std::move(a), std::move(p)};
     }
     assert(pairs.connected());
-
     // The geometric mean's answer is near; it is exact where the judged pairs are consistent.
-    VectorXd y = log_least_squares(pairs);
-    fill_missing(a, missing, y);
-    PrincipalPair principal = principal_eigenvector(a);
-
-    constexpr int most_steps =
-        60; // Four were the most seen for n = 9; convexity makes the halving below safe.
-    constexpr double longest_step = 2; // In ln a: keeps a far start from leaping where curvature is flat.
-    constexpr double level = 1e-14;    // Rounding of lambda, relative.
-    constexpr double settled = 1e-12;  // In ln a: Newton's next step would be far below the last digit.
-    constexpr double flat = 1e-13; // Gradient relative to lambda: rounding of the vectors is of this size.
-    for (int step = 0; step < most_steps; ++step) {
-        double steepest = 0;
-        VectorXd direction = newton_step(a, missing, principal, steepest);
-        if (steepest < flat * principal.lambda) break;
-        double longest = 0;
-        for (const auto& [i, j] : missing) {
-            longest = std::max(longest,
-                               std::abs(direction(static_cast<Index>(i)) - direction(static_cast<Index>(j))));
-        }
-        if (!std::isfinite(longest)) break;
-        if (longest > longest_step) direction *= longest_step / longest;
-
-        // Near the minimum lambda is level to its last digits while the steps still gain: a level step
-        // counts.
-        bool improved = false;
-        for (int halving = 0; halving < 40 && !improved; ++halving, direction *= 0.5) {
-            const VectorXd candidate = y + direction;
-            fill_missing(a, missing, candidate);
-            PrincipalPair next = principal_eigenvector(a, &principal);
-            if (next.lambda < principal.lambda * (1 + level)) {
-                y = candidate;
-                principal = std::move(next);
-                improved = true;
-            }
-        }
-        if (!improved) fill_missing(a, missing, y);
-        if (!improved || longest < settled) break;
-    }
-    return {std::move(a), std::move(principal)};
+    return least_lambda(std::move(a), free, start != nullptr ? potentials(*start) : log_least_squares(pairs),
+                        {}, start);
 }
 
 } // namespace steelyard
