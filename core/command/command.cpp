@@ -9,6 +9,7 @@
 
 #include "core/decision/problem.hpp"
 #include "core/decision/read.hpp"
+#include "core/results/corrections.hpp"
 #include "core/results/solve.hpp"
 #include "core/results/write_results.hpp"
 
@@ -57,10 +58,19 @@ int check_file(const std::string& file, std::istream& in, std::ostream& out, std
     return out.flush() ? done : cannot_write;
 }
 
-int solve_file(const std::string& file, std::istream& in, std::ostream& out, std::ostream& err) {
+/// What `solve` is asked for beside the standing.
+struct Wanted {
+    bool all = false;
+    bool corrections = false;
+};
+
+int solve_file(const std::string& file, const Wanted& wanted, std::istream& in, std::ostream& out,
+               std::ostream& err) {
     const auto decision = open_decision(file, in, err);
     if (!decision) return refused;
-    out << write_results(*decision, solve(*decision));
+    Results results = solve(*decision);
+    if (wanted.all || wanted.corrections) add_corrections(*decision, results);
+    out << write_results(*decision, results);
     return out.flush() ? done : cannot_write;
 }
 
@@ -80,6 +90,11 @@ int run_command(int argc, const char* const* argv, std::istream& in, std::ostrea
 
     auto* solve = app.add_subcommand("solve", "Prints the results file of a decision.");
     solve->add_option("FILE", file, file_help)->required();
+    Wanted wanted;
+    solve->add_flag("--corrections", wanted.corrections,
+                    "for each judgment the value that suits the others best, and the fewest changes that "
+                    "bring each set within its limit");
+    solve->add_flag("--all", wanted.all, "everything there is");
 
     try {
         app.parse(argc, argv);
@@ -88,7 +103,7 @@ int run_command(int argc, const char* const* argv, std::istream& in, std::ostrea
         return out.flush() ? done : cannot_write;
     }
     if (check->parsed()) return check_file(file, in, out, err);
-    return solve_file(file, in, out, err);
+    return solve_file(file, wanted, in, out, err);
 }
 
 } // namespace steelyard

@@ -222,7 +222,9 @@ private:
         const double lambda = current_->whole.principal.lambda;
         const double way = std::log(set_.unchanged().whole.principal.lambda / limit_);
         const double left = std::max(0.0, std::log(lambda / limit_));
-        progress_ = std::max(progress_, share_of_exact() + (1 - share_of_exact()) * (1 - left / way));
+        // What is left out again at the end is the rest.
+        const double grown = .95 * (1 - left / way);
+        progress_ = std::max(progress_, share_of_exact() + (1 - share_of_exact()) * grown);
         if (lambda > limit_) {
             rank_candidates();
         } else if (many()) {

@@ -21,6 +21,21 @@ struct Misfit {
     double given = 1;
     std::optional<double>
         implied; ///< Ratio of the weights re-derived without this pair; none if the set falls apart.
+    /// With corrections only (see corrections.hpp): the ratio at which lambda max is least, and CR there.
+    std::optional<double> best{};
+    std::optional<double> cr_at_best{};
+};
+
+/// The smallest number of judgments that need new values to bring a set within its limit, with such values.
+struct FewestChangesResult {
+    struct Change {
+        Id a;
+        Id b;
+        double to = 1;
+    };
+    bool proven = false; ///< Fewer would not do; otherwise they are merely the fewest found.
+    std::vector<Change> changes;
+    double cr = 0; ///< With them.
 };
 
 /// Items that no judgment links with the others, when a set does not hang together.
@@ -50,6 +65,7 @@ struct SetResult {
     std::optional<double> zeta;  ///< Kendall's coefficient of consistence, complete sets without ties.
     std::vector<Misfit> misfits; ///< Worst first.
     Parts parts;                 ///< More than one where the set does not hang together.
+    std::optional<FewestChangesResult> fewest_changes; ///< With corrections only.
 };
 
 struct NodeResult {
@@ -109,6 +125,7 @@ struct Results {
     Settings settings;
     std::vector<Id> options; ///< In play.
     std::vector<SetResult> sets;
+    bool corrected = false;        ///< Whether corrections were added to the sets.
     std::vector<NodeResult> nodes; ///< Depth first, root first.
     std::vector<LeafResult> leaves;
     std::vector<ComputedFigures> figures;

@@ -58,7 +58,23 @@ JsonValue all_settings(Settings settings) {
     return out;
 }
 
-JsonValue set_json(const SetResult& set) {
+JsonValue fewest_changes_json(const std::optional<FewestChangesResult>& fewest) {
+    if (!fewest) return JsonValue{};
+    JsonValue out = JsonValue::object();
+    out.add("count", JsonValue::of(static_cast<int>(fewest->changes.size())))
+        .add("proven", JsonValue::of(fewest->proven));
+    JsonValue changes = JsonValue::array();
+    for (const auto& change : fewest->changes) {
+        JsonValue one = JsonValue::object();
+        one.add("a", JsonValue::of(change.a)).add("b", JsonValue::of(change.b));
+        one.add("to", JsonValue::of(change.to));
+        changes.items.push_back(std::move(one));
+    }
+    out.add("changes", std::move(changes));
+    return out;
+}
+
+JsonValue set_json(const SetResult& set, bool corrected) {
     JsonValue out = JsonValue::object();
     out.add("set", JsonValue::of(set.set)).add("by", maybe(set.by)).add("items", ids(set.items));
     out.add("missing", id_lists(set.missing)).add("weights", by_id(set.items, set.weights));
@@ -75,9 +91,11 @@ JsonValue set_json(const SetResult& set) {
         JsonValue one = JsonValue::object();
         one.add("a", JsonValue::of(misfit.a)).add("b", JsonValue::of(misfit.b));
         one.add("given", JsonValue::of(misfit.given)).add("implied", maybe(misfit.implied));
+        if (corrected) one.add("best", maybe(misfit.best)).add("cr_at_best", maybe(misfit.cr_at_best));
         misfits.items.push_back(std::move(one));
     }
     out.add("misfits", std::move(misfits));
+    if (corrected) out.add("fewest_changes", fewest_changes_json(set.fewest_changes));
     return out;
 }
 
@@ -134,7 +152,7 @@ std::string write_results(const Decision& decision, const Results& results) {
     out.add("settings", all_settings(results.settings));
 
     JsonValue sets = JsonValue::array();
-    for (const auto& set : results.sets) sets.items.push_back(set_json(set));
+    for (const auto& set : results.sets) sets.items.push_back(set_json(set, results.corrected));
     out.add("sets", std::move(sets));
 
     JsonValue weights = JsonValue::object();

@@ -28,4 +28,11 @@ inline std::size_t cases(std::size_t usual) {
     return limit > 0 && limit < usual ? limit : usual;
 }
 
+/// The same for cases that are slow in themselves: `usual` in the proportion in which STEELYARD_CASES is less
+/// than the 2000 random decisions of the second solver; one at least.
+inline std::size_t slow_cases(std::size_t usual) {
+    const std::size_t some = usual * cases(2000) / 2000;
+    return some > 0 ? some : 1;
+}
+
 } // namespace steelyard::testing

@@ -56,6 +56,26 @@ PairMatrix random_near_pairs(std::size_t n, double noise, int percent, std::uint
     return pairs;
 }
 
+PairMatrix random_graph_pairs(std::size_t n, std::size_t pairs, std::uint64_t seed) {
+    Dice dice(seed);
+    const int all = static_cast<int>(n * (n - 1) / 2);
+    const int tree = static_cast<int>(n) - 1;
+    int wanted = pairs == 0 ? dice.between(tree, all) : static_cast<int>(pairs);
+    PairMatrix graph(n);
+    const auto judge = [&](std::size_t i, std::size_t j) {
+        graph.set(i, j, std::exp(std::log(9) * dice.between(-1000, 1000) / 1000));
+        --wanted;
+    };
+    for (std::size_t i = 1; i < n; ++i) judge(i, static_cast<std::size_t>(dice.below(static_cast<int>(i))));
+    while (wanted > 0) {
+        const auto open = graph.missing();
+        if (open.empty()) break;
+        const auto [i, j] = dice.pick(open);
+        judge(i, j);
+    }
+    return graph;
+}
+
 PairMatrix permuted(const PairMatrix& pairs, const std::vector<std::size_t>& order) {
     PairMatrix result(pairs.size());
     for (const auto& [i, j] : pairs.judged_pairs()) result.set(order[i], order[j], pairs.at(i, j));

@@ -24,6 +24,10 @@ PairMatrix random_scale_pairs(std::size_t n, std::uint64_t seed);
 /// the pairs that are not needed to connect the items missing.
 PairMatrix random_near_pairs(std::size_t n, double noise, int percent, std::uint64_t seed);
 
+/// A random connected graph of judgments: a random tree, and other pairs until about `pairs` are judged, each
+/// 1/9 to 9 with equal chances of its logarithm. 0 pairs: any number.
+PairMatrix random_graph_pairs(std::size_t n, std::size_t pairs, std::uint64_t seed);
+
 /// The same judgments with item i standing at place order[i].
 PairMatrix permuted(const PairMatrix& pairs, const std::vector<std::size_t>& order);
 

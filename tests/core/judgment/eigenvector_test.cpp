@@ -10,6 +10,7 @@
 #include "tests/support/close.hpp"
 #include "tests/support/dice.hpp"
 #include "tests/support/pairs.hpp"
+#include "tests/support/slow_least.hpp"
 
 namespace steelyard {
 
@@ -253,6 +254,45 @@ TEST_CASE("completion: the same as minimising one pair after the other") {
                                  slow(static_cast<Index>(p), static_cast<Index>(q));
             CHECK_THAT(std::log(ratio), WithinAbs(0, 1e-5));
         }
+    }
+}
+
+TEST_CASE("completion: a slow minimiser finds the same on random connected graphs of up to nine items") {
+    std::size_t with_gaps = 0;
+    for (std::uint64_t seed = 1; seed <= testing::slow_cases(300); ++seed) {
+        const std::size_t n = 3 + seed % 7;
+        const PairMatrix pairs = testing::random_graph_pairs(n, 0, seed);
+        std::vector<testing::SlowFree> missing;
+        const testing::Square square = testing::slow_square(pairs, missing);
+        const testing::SlowLeast slow = testing::slow_least(square, missing);
+        const Completion whole = complete_optimally(pairs);
+        INFO("seed " << seed << ", " << n << " items, " << missing.size() << " missing");
+        with_gaps += missing.empty() ? 0 : 1;
+        CHECK_THAT(whole.principal.lambda, WithinRel(slow.lambda, 1e-10));
+        for (std::size_t i = 0; i < n; ++i) {
+            for (std::size_t j = 0; j < n; ++j)
+                CHECK_THAT(whole.matrix(static_cast<Index>(i), static_cast<Index>(j)),
+                           WithinRel(slow.matrix[i][j], 1e-8));
+        }
+    }
+    CHECK(5 * with_gaps >= 4 * testing::slow_cases(300));
+}
+
+TEST_CASE("completion: vectors of nearly the same pairs as a start lead to the same") {
+    for (std::uint64_t seed = 1; seed <= testing::cases(40); ++seed) {
+        const std::size_t n = 4 + seed % 6;
+        PairMatrix pairs = testing::random_near_pairs(n, 1.5, 50, seed);
+        const Completion before = complete_optimally(pairs);
+        const auto [i, j] = pairs.judged_pairs()[seed % (n - 1)];
+        pairs.set(i, j, 3);
+        if (seed % 3 == 0 && !pairs.missing().empty())
+            pairs.set(pairs.missing()[0][0], pairs.missing()[0][1], .2);
+        const Completion cold = complete_optimally(pairs);
+        const Completion warm = complete_optimally(pairs, &before.principal);
+        INFO("seed " << seed << ", " << n << " items");
+        CHECK_THAT(warm.principal.lambda, WithinRel(cold.principal.lambda, 1e-13));
+        CHECK_THAT((warm.matrix.array() / cold.matrix.array() - 1).abs().maxCoeff(), WithinAbs(0, 1e-10));
+        CHECK_THAT((warm.principal.right - cold.principal.right).cwiseAbs().maxCoeff(), WithinAbs(0, 1e-12));
     }
 }
 

@@ -112,4 +112,21 @@ TEST_CASE("misfits: averaged columns need every pair, so the eigenvector stands 
     }
 }
 
+TEST_CASE("misfits: implied by the weights found anew without the pair, complete sets of 3 to 30 items") {
+    for (const Method method : {Method::eigenvector, Method::geometric_mean}) {
+        for (std::uint64_t seed = 1; seed <= testing::cases(30); ++seed) {
+            const std::size_t n = seed == 30 ? 30 : 3 + seed % 8;
+            const PairMatrix pairs = seed % 2 == 0 ? testing::random_scale_pairs(n, seed)
+                                                   : testing::random_near_pairs(n, .7, 0, seed);
+            for (const auto& misfit : misfits_by(method, pairs)) {
+                PairMatrix rest = pairs;
+                rest.clear(misfit.i, misfit.j);
+                const Weights w = weights_by(method, rest).value();
+                INFO("seed " << seed << ", " << n << " items, pair " << misfit.i << ", " << misfit.j);
+                CHECK_THAT(misfit.implied.value(), WithinRel(w[misfit.i] / w[misfit.j], 1e-10));
+            }
+        }
+    }
+}
+
 } // namespace steelyard
