@@ -1,9 +1,14 @@
 #include <catch_amalgamated.hpp>
 
+#include "core/judgment/best_value.hpp"
 #include "core/judgment/consistency.hpp"
+#include "core/judgment/fewest_changes.hpp"
 #include "core/judgment/misfits.hpp"
 #include "core/judgment/random_index.hpp"
+#include "core/results/corrections.hpp"
+#include "core/results/solve.hpp"
 #include "tests/support/close.hpp"
+#include "tests/support/find_results.hpp"
 #include "tests/support/pairs.hpp"
 
 // HOUSE: eight criteria for buying a house. T. L. Saaty, How to make a decision: the analytic hierarchy
@@ -39,6 +44,35 @@ double implied_3_7(Method method) {
         if (misfit.i == 2 && misfit.j == 6) return misfit.implied.value();
     }
     return 0;
+}
+
+/// HOUSE as a decision: eight criteria "1" to "8", one option.
+Decision house_decision(RandomIndexTable table) {
+    Decision decision;
+    decision.options.push_back({"o1"});
+    decision.criteria.id = "goal";
+    for (int item = 1; item <= 8; ++item) {
+        Node child;
+        child.id = std::to_string(item);
+        decision.criteria.children.push_back(child);
+    }
+    for (const auto& [i, j] : house_pairs().judged_pairs()) {
+        Judgment judgment;
+        judgment.set = "goal";
+        judgment.a = std::to_string(i + 1);
+        judgment.b = std::to_string(j + 1);
+        judgment.ratio = house_pairs().at(i, j);
+        decision.judgments.push_back(judgment);
+    }
+    decision.settings.random_index = table;
+    return decision;
+}
+
+SetResult corrected_house(RandomIndexTable table) {
+    const Decision decision = house_decision(table);
+    Results results = solve(decision);
+    add_corrections(decision, results);
+    return testing::set_of(results, "goal");
 }
 
 } // namespace
@@ -112,6 +146,46 @@ TEST_CASE("HOUSE: 3 and 7 set to one half, as Saaty 2003 prints it") {
     CHECK_THAT(ci_of(house_with_half()) / random_index(RandomIndexTable::alonso_lamata_2006, 8).value(),
                WithinAbs(.083, .001));
     CHECK_THAT(ci_of(house_with_half()) / 1.40, WithinAbs(.083, printed_3));
+}
+
+// Digits by an independent computation (numpy), of the value that minimises lambda max with the others held.
+TEST_CASE("HOUSE: the best value of 3 and 7, and the nearest on the scale") {
+    BestValues values(house_pairs());
+    const BestValue best = values.of(2, 6).value();
+    CHECK_THAT(best.ratio, WithinAbs(.4625, printed_4));
+    CHECK_THAT(best.implied, WithinAbs(.4595, printed_4));
+    CHECK(nearest_on_scale(best.ratio) == .5);
+    CHECK_THAT(values.lambda_at(2, 6, .5), WithinAbs(8.8117, printed_4));
+}
+
+TEST_CASE("HOUSE: with corrections the pair 3 and 7 comes first, and one change is the fewest") {
+    const SetResult set = corrected_house(RandomIndexTable::alonso_lamata_2006);
+    REQUIRE(set.misfits.size() == 28);
+    const Misfit& first = set.misfits.front();
+    CHECK(first.a == "3");
+    CHECK(first.b == "7");
+    CHECK_THAT(first.best.value(), WithinAbs(.4625, printed_4));
+    CHECK_THAT(first.cr_at_best.value(), WithinAbs(.0824, printed_4));
+    for (const auto& misfit : set.misfits)
+        CHECK((misfit.cr_at_best.value() <= .1) == (&misfit == &first)); // No other change alone would do.
+    const FewestChangesResult& fewest = set.fewest_changes.value();
+    CHECK(fewest.proven);
+    REQUIRE(fewest.changes.size() == 1);
+    CHECK(fewest.changes[0].a == "3");
+    CHECK(fewest.changes[0].b == "7");
+    CHECK_THAT(fewest.changes[0].to, WithinAbs(.4625, printed_4));
+    CHECK_THAT(fewest.cr, WithinAbs(.0824, printed_4));
+}
+
+TEST_CASE("HOUSE: the order of corrections does not hang on the table of random indices") {
+    const SetResult one = corrected_house(RandomIndexTable::alonso_lamata_2006);
+    const SetResult other = corrected_house(RandomIndexTable::saaty_1980);
+    REQUIRE(one.misfits.size() == other.misfits.size());
+    for (std::size_t k = 0; k < one.misfits.size(); ++k) {
+        CHECK(one.misfits[k].a == other.misfits[k].a);
+        CHECK(one.misfits[k].b == other.misfits[k].b);
+    }
+    CHECK(other.fewest_changes.value().changes.size() == 1);
 }
 
 } // namespace steelyard

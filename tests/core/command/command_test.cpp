@@ -12,6 +12,7 @@
 #include "core/command/command.hpp"
 #include "core/decision/problem.hpp"
 #include "core/decision/read.hpp"
+#include "core/results/corrections.hpp"
 #include "core/results/solve.hpp"
 #include "core/results/write_results.hpp"
 #include "tests/support/bad_files.hpp"
@@ -262,6 +263,26 @@ TEST_CASE("command: every kind of bad file ends in exit code 1, with each place 
                        ContainsSubstring(place.empty() ? "The file as a whole:" : "At " + place + ":"));
         }
     }
+}
+
+TEST_CASE("command: solve adds corrections when asked for them, or for everything") {
+    const std::string& text = test::full_decision_text();
+    const Decision decision = test::read(text);
+    Results results = solve(decision);
+    add_corrections(decision, results);
+    const std::string expected = write_results(decision, results);
+    const TemporaryFile file("command_test corrections.decision.json", text);
+    for (const std::vector<std::string>& arguments :
+         {std::vector<std::string>{"solve", file.name(), "--corrections"},
+          {"solve", "--corrections", file.name()},
+          {"solve", file.name(), "--all"}}) {
+        const Ran ran = run(arguments);
+        CHECK(ran.code == done);
+        CHECK(ran.err.empty());
+        CHECK(ran.out == expected);
+    }
+    CHECK(run({"solve", file.name()}).out != expected);
+    CHECK(run({"check", file.name(), "--corrections"}).code == wrong_usage);
 }
 
 } // namespace steelyard

@@ -6,6 +6,7 @@
 
 #include "core/decision/fingerprint.hpp"
 #include "core/decision/json_value.hpp"
+#include "core/results/corrections.hpp"
 #include "core/results/solve.hpp"
 #include "core/results/write_results.hpp"
 #include "tests/support/close.hpp"
@@ -217,6 +218,39 @@ TEST_CASE("results file: whatever the decision, every number is finite and every
         CHECK(parsed.problems.empty());
         CHECK(count_numbers(parsed.value) > 0);
     }
+}
+
+TEST_CASE("results file: corrections stand in it when they were added, else nothing of them") {
+    const Decision decision = test::read(R"({"format": "steelyard-decision", "version": 1,
+        "options": [{"id": "o1"}], "criteria": {"id": "goal", "children": [{"id": "a"}, {"id": "b"}, {"id": "c"}]},
+        "judgments": [{"set": "goal", "a": "a", "b": "b", "ratio": 2}, {"set": "goal", "a": "a", "b": "c", "ratio": 0.2},
+                      {"set": "goal", "a": "b", "b": "c", "ratio": 3}]})");
+    Results results = solve(decision);
+    const JsonValue plain = parse_json(write_results(decision, results)).value;
+    CHECK(member_names(at(plain, {"sets", "0", "misfits", "0"})) == Names{"a", "b", "given", "implied"});
+    CHECK(at(plain, {"sets", "0"}).find("fewest_changes") == nullptr);
+    add_corrections(decision, results);
+    const JsonValue corrected = parse_json(write_results(decision, results)).value;
+    const JsonValue& misfit = at(corrected, {"sets", "0", "misfits", "1"});
+    CHECK(member_names(misfit) == Names{"a", "b", "given", "implied", "best", "cr_at_best"});
+    CHECK_THAT(at(misfit, {"best"}).number, Catch::Matchers::WithinAbs(6, 1e-9));
+    CHECK_THAT(at(misfit, {"cr_at_best"}).number, Catch::Matchers::WithinAbs(0, 1e-12));
+    const JsonValue& fewest = at(corrected, {"sets", "0", "fewest_changes"});
+    CHECK(member_names(fewest) == Names{"count", "proven", "changes"});
+    CHECK(at(fewest, {"count"}).number == 1);
+    CHECK(at(fewest, {"proven"}).truth);
+    CHECK(member_names(at(fewest, {"changes", "0"})) == Names{"a", "b", "to"});
+    CHECK(at(fewest, {"changes", "0", "b"}).text == "c");
+}
+
+TEST_CASE("results file: corrections that cannot be are null") {
+    const Decision decision = test::read(small);
+    Results results = solve(decision);
+    add_corrections(decision, results);
+    const JsonValue file = parse_json(write_results(decision, results)).value;
+    CHECK(at(file, {"sets", "0", "misfits", "0", "best"}).kind == Kind::null);
+    CHECK(at(file, {"sets", "0", "misfits", "0", "cr_at_best"}).kind == Kind::null);
+    CHECK(at(file, {"sets", "0", "fewest_changes"}).kind == Kind::null);
 }
 
 } // namespace steelyard
