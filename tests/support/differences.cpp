@@ -318,4 +318,39 @@ std::vector<std::string> differences(const Decision& decision, const Results& co
     return compare.found;
 }
 
+std::vector<std::string> correction_differences(const Decision& decision, const Results& core,
+                                                const SlowResults& slow) {
+    Comparison compare;
+    std::map<Id, int> judges;
+    for (const SlowSet& entry : slow.sets) judges[entry.set] += entry.by.empty() ? 0 : 1;
+    for (std::size_t k = 0; k < std::min(core.sets.size(), slow.sets.size()); ++k) {
+        const SetResult& entry = core.sets[k];
+        const SlowSet& other = slow.sets[k];
+        const SlowIndices& indices = other.indices;
+        const std::string where = "set " + other.set + " by '" + other.by + "' ";
+        compare.same(where + "entry", entry.set + "/" + entry.by, other.set + "/" + other.by);
+        const auto n = static_cast<double>(other.items.size());
+        double before = 0;
+        for (const Misfit& misfit : entry.misfits) {
+            const SlowMisfit& slow_misfit = other.misfits.at({misfit.a, misfit.b});
+            const std::string what = where + misfit.a + "-" + misfit.b;
+            compare.maybe(what + " best", misfit.best, slow_misfit.best, completed_tolerance);
+            std::optional<double> ratio;
+            if (indices.ri)
+                ratio =
+                    (slow_misfit.lambda_at_best.value_or(*indices.lambda_max) - n) / (n - 1) / *indices.ri;
+            compare.maybe(what + " CR at best", misfit.cr_at_best, ratio, exact_tolerance);
+            if (ratio && *ratio < before - exact_tolerance)
+                compare.found.push_back(what + " stands too late");
+            before = ratio.value_or(0);
+        }
+        compare.same(where + "fewest changes exist", entry.fewest_changes.has_value(),
+                     indices.cr.has_value() && (!other.by.empty() || judges[other.set] < 2));
+        if (entry.fewest_changes)
+            compare.same(where + "changes needed", !entry.fewest_changes->changes.empty(),
+                         *indices.cr > decision.settings.limit + 1e-9);
+    }
+    return compare.found;
+}
+
 } // namespace steelyard::testing

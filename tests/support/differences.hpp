@@ -15,4 +15,9 @@ namespace steelyard::testing {
 /// Ids and lists must be the same.
 std::vector<std::string> differences(const Decision& decision, const Results& core, const SlowResults& slow);
 
+/// The same for the corrections added to the core's results: best values with the CR they give, their order,
+/// and where fewest changes are told and where none are needed. Which they are is tested by itself.
+std::vector<std::string> correction_differences(const Decision& decision, const Results& core,
+                                                const SlowResults& slow);
+
 } // namespace steelyard::testing

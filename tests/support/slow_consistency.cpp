@@ -142,8 +142,15 @@ std::map<SlowPair, SlowMisfit> slow_misfits(const SlowPairs& pairs, Method metho
             misfit.size = std::abs(std::log(misfit.given * weights->at(b) / weights->at(a)));
             SlowPairs rest = pairs;
             rest.forget(a, b);
-            if (const auto implied = slow_weights(used, rest))
-                misfit.implied = implied->at(a) / implied->at(b);
+            if (slow_parts(rest).size() == 1) {
+                // Where only this pair may move, besides the missing ones, it is one more missing pair.
+                const SlowEigen without = slow_eigen(rest);
+                misfit.best = without.filled.at({a, b});
+                misfit.lambda_at_best = without.lambda;
+                const SlowWeights implied =
+                    used == Method::geometric_mean ? slow_geometric_mean(rest) : without.weights;
+                misfit.implied = implied.at(a) / implied.at(b);
+            }
             misfits[{a, b}] = misfit;
         }
     return misfits;

@@ -159,7 +159,9 @@ SlowEigen slow_eigen(const SlowPairs& pairs) {
         if (change <= 1e-13) break;
     }
     const double lambda = iterate(a, w);
-    return {lambda, named(pairs.items, w)};
+    SlowEigen eigen{lambda, named(pairs.items, w), {}};
+    for (const auto& [i, j] : holes) eigen.filled[{pairs.items[i], pairs.items[j]}] = a[i][j];
+    return eigen;
 }
 
 SlowWeights slow_geometric_mean(const SlowPairs& pairs) {

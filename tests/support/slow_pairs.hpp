@@ -29,6 +29,7 @@ struct SlowPairs {
 struct SlowEigen {
     double lambda = 0;
     SlowWeights weights;
+    std::map<SlowPair, double> filled; ///< The missing ratios, the earlier item first.
 };
 
 /// What the consistency of one matrix comes to; methods and sources as each function of slow_pairs.cpp says.
@@ -44,6 +45,9 @@ struct SlowMisfit {
     double given = 1;
     std::optional<double> implied;
     double size = 0;
+    /// The ratio at which the eigenvalue is least, the other judged pairs held, and that eigenvalue; none
+    /// where the set falls apart without the pair.
+    std::optional<double> best, lambda_at_best;
 };
 
 /// The items linked by judgments, part by part.
