@@ -223,8 +223,8 @@ private:
             const auto set = solved_.find(at.node->id);
             const SetResult* pairs =
                 at.node->rate == RateBy::pairs && set != solved_.end() ? &set->second.front() : nullptr;
-            const LocalValues local =
-                local_values(worths_on(*at.node, results_.options, pairs), d_.settings.synthesis);
+            LeafWorths worths = worths_on(*at.node, results_.options, pairs);
+            const LocalValues local = local_values(worths, d_.settings.synthesis);
             if (local.all_zero) {
                 results_.notices.push_back(
                     {"all-worth-nothing",
@@ -239,7 +239,8 @@ private:
                 if (local.missing[o]) ranged[o] = true;
                 if (local.missing[o] && at.weight > 0) results_.provisional = true;
             }
-            results_.leaves.push_back({at.node->id, at.weight, local.values, local.missing});
+            results_.leaves.push_back(
+                {at.node->id, at.weight, local.values, local.missing, std::move(worths.worths)});
         }
         for (auto node = results_.nodes.rbegin(); node != results_.nodes.rend(); ++node) {
             const auto parent = std::find_if(results_.nodes.begin(), results_.nodes.end(),
