@@ -66,6 +66,10 @@ std::optional<MovingFigure> moving_figure(const Decision& decision, const Result
         if (r.at_least) moving.at_least = std::max(moving.at_least.value_or(*r.at_least), *r.at_least);
         if (r.at_most) moving.at_most = std::min(moving.at_most.value_or(*r.at_most), *r.at_most);
     }
+    // A range that straddles a limit keeps its option in play, wherever its value is.
+    const auto now = Figures(decision).of(leaf, option).value;
+    if (now && moving.at_least && *now < *moving.at_least) moving.at_least.reset();
+    if (now && moving.at_most && *now > *moving.at_most) moving.at_most.reset();
     if (moving.at_least || moving.at_most) moving.without = scores_without(decision, results, moving.option);
     return moving;
 }

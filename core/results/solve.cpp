@@ -10,6 +10,8 @@
 #include "core/measure/curve.hpp"
 #include "core/measure/figures.hpp"
 #include "core/measure/grades.hpp"
+#include "core/results/lead.hpp"
+#include "core/results/rates.hpp"
 #include "core/results/solve_sets.hpp"
 #include "core/standing/local_values.hpp"
 #include "core/standing/synthesis.hpp"
@@ -45,6 +47,8 @@ public:
         synthesise();
         order_sets();
         list_open();
+        if (results_.first) results_.rates = rates_at(d_, results_, results_.options[*results_.first]);
+        results_.lead_money = lead_in_money(d_, results_);
         return std::move(results_);
     }
 
