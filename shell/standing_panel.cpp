@@ -73,7 +73,7 @@ void draw_standing(Ui& ui, const RoomView& view, Box box) {
     list->AddRectFilled(box.at(), box.end(), theme.paper);
     list->AddRectFilled(box.at(), {box.x + 1, box.bottom()}, theme.line);
     Box inside{box.x + 18, box.y + 14, box.w - 30, box.h - 20};
-    const Box foot = inside.take_bottom(22, 4);
+    const Box foot = inside.take_bottom(22, 10);
     draw_text(ui, foot.at(), "Ranks preferences; checks no safety.",
               {.font = Font::small, .ink = theme.quiet, .max_width = foot.w});
     ScrollArea area(ui, "standing-panel", inside);
