@@ -140,6 +140,24 @@ std::string missing_sentence(const std::vector<std::string>& leaves, const std::
            "; the mean of the others stands in.";
 }
 
+/// Two digits that count are all that "about" can claim: 1,437 becomes 1,400.
+std::string about_text(double value) {
+    if (!(value > 0)) return figure_text(value);
+    const double unit = std::pow(10.0, std::floor(std::log10(value)) - 1);
+    return figure_text(std::round(value / unit) * unit);
+}
+
+/// "1 week" of "weeks", "1 m\xC2\xB2", "1" where there is no unit. Only a plain word loses its plural.
+std::string one_unit(const std::string& unit) {
+    if (unit.empty()) return "1";
+    const bool word = unit.size() > 3 && std::all_of(unit.begin(), unit.end(), [](char c) {
+                          return (c >= 'a' && c <= 'z') || (c >= 'A' && c <= 'Z');
+                      });
+    if (word && unit.back() == 's' && unit[unit.size() - 2] != 's')
+        return "1 " + unit.substr(0, unit.size() - 1);
+    return "1 " + unit;
+}
+
 } // namespace
 
 std::string open_sentence(const Decision& decision, const OpenItem& item) {
@@ -208,6 +226,31 @@ std::string standing_sentence(const Decision& decision, const Results& results) 
     if (lead <= results.settings.too_close + 1e-9)
         return "Too close to call: " + first.front() + " is only " + ahead;
     return first.front() + " is first, " + ahead;
+}
+
+std::string lead_in_money_words(const Decision& decision, const Results& results) {
+    if (!results.lead_money || !(*results.lead_money > 0)) return {};
+    const Node* money = find_node(decision.criteria, results.settings.money);
+    const std::string unit = money == nullptr || money->unit.empty() ? "" : " " + money->unit;
+    return "worth about " + about_text(*results.lead_money) + unit;
+}
+
+std::vector<RateWords> rate_words(const Decision& decision, const Results& results) {
+    std::vector<RateWords> lines;
+    if (!results.rates) return lines;
+    const Node* money = find_node(decision.criteria, results.rates->money);
+    const std::string unit = money == nullptr || money->unit.empty() ? "" : " " + money->unit;
+    for (const auto& rate : results.rates->rates) {
+        const Node* leaf = find_node(decision.criteria, rate.leaf);
+        if (!rate.per_unit || leaf == nullptr) continue;
+        const std::string amount = about_text(std::abs(*rate.per_unit)) + unit;
+        const std::string name = node_name(decision, rate.leaf);
+        // A figure that must fall for the price to rise is paid for when it falls.
+        const std::string way = *rate.per_unit < 0 ? " less in " : " more in ";
+        lines.push_back({amount, leaf->rate == RateBy::grade ? "for one grade better in " + name
+                                                             : "for " + one_unit(leaf->unit) + way + name});
+    }
+    return lines;
 }
 
 std::vector<std::string> stand_in_sentences(const Decision& decision, const Results& results) {

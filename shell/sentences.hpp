@@ -30,6 +30,16 @@ std::string exclusion_reason(const Decision& decision, const Exclusion& exclusio
 /// in play, where several share first place and where the lead is too close by the decision's own settings.
 std::string standing_sentence(const Decision& decision, const Results& results);
 
+/// "worth about 1,400 EUR", the lead in money; empty where there is none to tell.
+std::string lead_in_money_words(const Decision& decision, const Results& results);
+
+/// What the judgments pay for a unit of one criterion.
+struct RateWords {
+    std::string amount; ///< "1,800 EUR".
+    std::string what;   ///< "for 1 week less in Delivery".
+};
+std::vector<RateWords> rate_words(const Decision& decision, const Results& results);
+
 /// What stands in for each missing answer that has weight, so that there can be a ranking at all.
 std::vector<std::string> stand_in_sentences(const Decision& decision, const Results& results);
 

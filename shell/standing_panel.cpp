@@ -46,6 +46,25 @@ float draw_ranked(Ui& ui, const RoomView& view, std::size_t o, const Box& box) {
     return 56;
 }
 
+/// What the judgments pay, at the option in first place; returns the height used.
+float draw_rates(Ui& ui, const RoomView& view, const Box& box) {
+    const auto rates = rate_words(view.decision, view.results);
+    if (rates.empty()) return 0;
+    const Theme& theme = ui.look();
+    float y = box.y;
+    rule(ui, box.x, y, box.w);
+    y += 12;
+    draw_text(ui, {box.x, y}, "You pay", {.font = Font::strong, .ink = theme.quiet});
+    y += 26;
+    for (const auto& rate : rates) {
+        draw_text(ui, {box.x, y}, rate.amount, {.font = Font::strong, .max_width = box.w});
+        y += 20;
+        y += draw_paragraph(ui, {box.x, y}, box.w, rate.what, {.font = Font::small, .ink = theme.quiet}) + 6;
+    }
+    draw_text(ui, {box.x, y}, "Would you?", {.font = Font::strong, .ink = theme.steel, .max_width = box.w});
+    return y + 28 - box.y;
+}
+
 } // namespace
 
 void draw_standing(Ui& ui, const RoomView& view, Box box) {
@@ -54,7 +73,7 @@ void draw_standing(Ui& ui, const RoomView& view, Box box) {
     list->AddRectFilled(box.at(), box.end(), theme.paper);
     list->AddRectFilled(box.at(), {box.x + 1, box.bottom()}, theme.line);
     Box inside{box.x + 18, box.y + 14, box.w - 30, box.h - 20};
-    const Box foot = inside.take_bottom(22, 4);
+    const Box foot = inside.take_bottom(22, 10);
     draw_text(ui, foot.at(), "Ranks preferences; checks no safety.",
               {.font = Font::small, .ink = theme.quiet, .max_width = foot.w});
     ScrollArea area(ui, "standing-panel", inside);
@@ -98,7 +117,11 @@ void draw_standing(Ui& ui, const RoomView& view, Box box) {
     if (results.options.size() > 1) {
         rule(ui, in.x, y, in.w);
         y += 12;
-        y += draw_paragraph(ui, {in.x, y}, in.w, standing_sentence(view.decision, results) + ".");
+        const std::string money = lead_in_money_words(view.decision, results);
+        y += draw_paragraph(ui, {in.x, y}, in.w,
+                            standing_sentence(view.decision, results) +
+                                (money.empty() ? "." : ", " + money + "."));
+        y += draw_rates(ui, view, {in.x, y + 10, in.w, 0});
     }
     area.reach(y + 8);
 }

@@ -81,8 +81,9 @@ struct NodeResult {
 struct LeafResult {
     Id leaf;
     double weight = 0;
-    std::vector<double> local; ///< Per option, placeholders included.
-    std::vector<bool> missing; ///< Per option: `local` is a placeholder.
+    std::vector<double> local;                 ///< Per option, placeholders included.
+    std::vector<bool> missing;                 ///< Per option: `local` is a placeholder.
+    std::vector<std::optional<double>> worths; ///< Per option, before they are set against each other.
 };
 
 /// Figures computed from a cost sheet, for every option that has one, in play or not.
@@ -120,6 +121,34 @@ struct OpenItem {
     Id requirement{};
 };
 
+/// What the judgments pay: the change of an option's money figure that exactly cancels a change of one unit
+/// (for grades: of one grade) of another of its figures.
+struct Rates {
+    Id money;  ///< The money criterion.
+    Id option; ///< At whose figures.
+    struct Rate {
+        Id leaf;
+        std::optional<double> per_unit; ///< None where either figure does not move the score.
+    };
+    std::vector<Rate> rates; ///< Of every other leaf rated by figures or grades, in the order of the tree.
+};
+
+/// Two options whose order turns round when the field changes.
+struct Reversal {
+    Id a;                   ///< Ahead before.
+    Id b;                   ///< Ahead after.
+    std::vector<Id> leaves; ///< Where their local values move for it, what moves most first.
+};
+
+/// What another option's coming or going does to the order of those that stay.
+struct FieldChange {
+    enum class Kind { without, copy_of, typical } kind = Kind::without;
+    Id option;                       ///< Empty for the typical one.
+    std::vector<Reversal> reversals; ///< In the order the options had before.
+    Id first_before;
+    Id first_after; ///< Among those that stay, and the newcomer (its id is empty).
+};
+
 struct Results {
     std::string decision_sha256;
     Settings settings;
@@ -137,6 +166,9 @@ struct Results {
     std::vector<std::pair<Id, std::array<double, 2>>>
         ranges;                        ///< Ideal synthesis: score with what is missing at 0 and at 1.
     std::optional<double> lead_points; ///< 100 x the difference of the first two scores.
+    std::optional<double> lead_money;  ///< See lead_in_money().
+    std::optional<Rates> rates;        ///< At the option in first place, where a money criterion is chosen.
+    std::optional<std::vector<FieldChange>> field_changes; ///< Only where asked for.
     std::vector<MustResult> musts;
     std::vector<Exclusion> excluded;
     std::vector<OpenItem> open;

@@ -10,6 +10,8 @@
 #include "core/measure/curve.hpp"
 #include "core/measure/figures.hpp"
 #include "core/measure/grades.hpp"
+#include "core/results/lead.hpp"
+#include "core/results/rates.hpp"
 #include "core/results/solve_sets.hpp"
 #include "core/standing/local_values.hpp"
 #include "core/standing/synthesis.hpp"
@@ -45,6 +47,8 @@ public:
         synthesise();
         order_sets();
         list_open();
+        if (results_.first) results_.rates = rates_at(d_, results_, results_.options[*results_.first]);
+        results_.lead_money = lead_in_money(d_, results_);
         return std::move(results_);
     }
 
@@ -223,8 +227,8 @@ private:
             const auto set = solved_.find(at.node->id);
             const SetResult* pairs =
                 at.node->rate == RateBy::pairs && set != solved_.end() ? &set->second.front() : nullptr;
-            const LocalValues local =
-                local_values(worths_on(*at.node, results_.options, pairs), d_.settings.synthesis);
+            LeafWorths worths = worths_on(*at.node, results_.options, pairs);
+            const LocalValues local = local_values(worths, d_.settings.synthesis);
             if (local.all_zero) {
                 results_.notices.push_back(
                     {"all-worth-nothing",
@@ -239,7 +243,8 @@ private:
                 if (local.missing[o]) ranged[o] = true;
                 if (local.missing[o] && at.weight > 0) results_.provisional = true;
             }
-            results_.leaves.push_back({at.node->id, at.weight, local.values, local.missing});
+            results_.leaves.push_back(
+                {at.node->id, at.weight, local.values, local.missing, std::move(worths.worths)});
         }
         for (auto node = results_.nodes.rbegin(); node != results_.nodes.rend(); ++node) {
             const auto parent = std::find_if(results_.nodes.begin(), results_.nodes.end(),

@@ -143,6 +143,30 @@ JsonValue open_json(const std::vector<OpenItem>& open) {
     return out;
 }
 
+JsonValue rates_json(const Rates& rates) {
+    JsonValue per_unit = JsonValue::object();
+    for (const auto& rate : rates.rates) per_unit.add(rate.leaf, maybe(rate.per_unit));
+    JsonValue out = JsonValue::object();
+    out.add("money", JsonValue::of(rates.money)).add("option", JsonValue::of(rates.option));
+    out.add("per_unit", std::move(per_unit));
+    return out;
+}
+
+JsonValue field_json(const std::vector<FieldChange>& changes) {
+    JsonValue out = JsonValue::array();
+    for (const auto& change : changes) {
+        std::string name = "typical added";
+        if (change.kind == FieldChange::Kind::without) name = "without " + change.option;
+        if (change.kind == FieldChange::Kind::copy_of) name = "copy of " + change.option;
+        std::vector<std::array<Id, 2>> reversed;
+        for (const auto& reversal : change.reversals) reversed.push_back({reversal.a, reversal.b});
+        JsonValue one = JsonValue::object();
+        one.add("change", JsonValue::of(name)).add("reversed", id_lists(reversed));
+        out.items.push_back(std::move(one));
+    }
+    return out;
+}
+
 } // namespace
 
 std::string write_results(const Decision& decision, const Results& results) {
@@ -183,10 +207,12 @@ std::string write_results(const Decision& decision, const Results& results) {
     out.add("ranges", std::move(ranges));
     if (results.lead_points) {
         JsonValue lead = JsonValue::object();
-        lead.add("points", JsonValue::of(*results.lead_points));
+        lead.add("points", JsonValue::of(*results.lead_points)).add("money", maybe(results.lead_money));
         out.add("lead", std::move(lead));
     }
     out.add("excluded", excluded_json(decision, results.excluded)).add("open", open_json(results.open));
+    if (results.rates) out.add("rates", rates_json(*results.rates));
+    if (results.field_changes) out.add("field_changes", field_json(*results.field_changes));
 
     JsonValue notices = JsonValue::array();
     for (const auto& notice : results.notices) {

@@ -111,6 +111,12 @@ void each_line(Font which, float width, std::string_view text, Each each) {
         const char* paragraph_end = stop != nullptr ? stop : end;
         do {
             const char* wrap = face->CalcWordWrapPositionA(scale, line, paragraph_end, width);
+            // It also breaks after commas and points, which would cut numbers apart.
+            if (wrap < paragraph_end && wrap > line && *wrap != ' ' && wrap[-1] != ' ') {
+                const std::string_view fits(line, static_cast<std::size_t>(wrap - line));
+                const auto space = fits.rfind(' ');
+                if (space != std::string_view::npos && space > 0) wrap = line + space;
+            }
             if (wrap == line && wrap < paragraph_end)
                 ++wrap; // One glyph wider than the column still takes a line.
             each(std::string_view(line, static_cast<std::size_t>(wrap - line)));
