@@ -35,8 +35,14 @@ bool App::State::is_example() const {
 RoomView App::State::view() {
     if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
     const bool examined = examination && examined_revision == session.revision();
-    return {session.decision(), session.results(), person,
-            keeper.read_only(), answering,         examined ? &examination->found() : nullptr};
+    return {session.decision(),
+            session.results(),
+            person,
+            keeper.read_only(),
+            answering,
+            examined ? &examination->found() : nullptr,
+            session.revision(),
+            [this] { return session.sha256(); }};
 }
 
 void App::State::open(Decision decision, const std::string& key, std::uint64_t stored_revision,

@@ -20,6 +20,9 @@ public:
     /// The ratio of a judged pair, 1 on the diagonal, 0 for a missing pair.
     double at(std::size_t i, std::size_t j) const { return entries_[i * size_ + j]; }
 
+    /// All ratios row by row, 1 on the diagonal, 0 for missing pairs.
+    const std::vector<double>& entries() const { return entries_; }
+
     /// Sets the pair and its reciprocal. i != j; ratio positive and finite.
     void set(std::size_t i, std::size_t j, double ratio);
     void clear(std::size_t i, std::size_t j);

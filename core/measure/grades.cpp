@@ -2,36 +2,50 @@
 
 #include <algorithm>
 #include <map>
+#include <string_view>
 
 namespace steelyard {
 
-GradeFinding find_grade_worth(const std::vector<Person>& people, const Node& leaf, const Id& option,
-                              const std::vector<const GradeEntry*>& entered,
-                              const std::vector<std::optional<double>>& worths) {
-    std::map<Id, Id> grade_by; // Person to the grade that stands; "" is agreed in the room.
-    for (const GradeEntry* entry : entered) grade_by[entry->by] = entry->grade;
-    const auto worth_of_grade = [&](const Id& grade) -> std::optional<double> {
-        for (std::size_t i = 0; i < leaf.grades.size(); ++i) {
-            if (leaf.grades[i].id == grade) return worths[i];
-        }
-        return std::nullopt;
+StandingGrades standing_grades(const std::vector<Person>& people, const Node& leaf, const Id& option,
+                               const std::vector<const GradeEntry*>& entered) {
+    std::map<std::string_view, const Id*>
+        grade_by; // Person to the grade that stands; "" is agreed in the room.
+    for (const GradeEntry* entry : entered) grade_by[entry->by] = &entry->grade;
+    const auto grade_of = [&](const Id& by) -> std::optional<std::size_t> {
+        const auto found = grade_by.find(by);
+        if (found == grade_by.end() || found->second->empty()) return std::nullopt;
+        const auto at = std::find_if(leaf.grades.begin(), leaf.grades.end(),
+                                     [&](const Grade& grade) { return grade.id == *found->second; });
+        if (at == leaf.grades.end()) return std::nullopt;
+        return static_cast<std::size_t>(at - leaf.grades.begin());
     };
-    if (const auto agreed = grade_by.find(Id{}); agreed != grade_by.end() && !agreed->second.empty()) {
-        return {true, worth_of_grade(agreed->second)};
+    StandingGrades grades;
+    grades.agreed = grade_of(Id{});
+    for (const auto& person : people) {
+        if (person.share == 0) continue;
+        const auto grade = grade_of(person.id);
+        if (!grade) continue;
+        if (std::find(person.abstains.begin(), person.abstains.end(), option) == person.abstains.end())
+            grades.own.push_back({&person, *grade});
+    }
+    return grades;
+}
+
+GradeFinding find_grade_worth(const StandingGrades& grades, const std::vector<std::optional<double>>& worths,
+                              const Person* without, const Person* only) {
+    if (grades.agreed) return {true, worths[*grades.agreed]};
+    for (const auto& [person, grade] : grades.own) {
+        if (person == only) return {true, worths[grade]};
     }
     GradeFinding finding;
     double sum = 0;
     double shares = 0;
-    for (const auto& person : people) {
-        const auto own = grade_by.find(person.id);
-        if (own == grade_by.end() || own->second.empty() || person.share == 0) continue;
-        if (std::find(person.abstains.begin(), person.abstains.end(), option) != person.abstains.end())
-            continue;
+    for (const auto& [person, grade] : grades.own) {
+        if (person == without) continue;
         finding.given = true;
-        const auto worth = worth_of_grade(own->second);
-        if (!worth) return finding;
-        sum += person.share * *worth;
-        shares += person.share;
+        if (!worths[grade]) return finding;
+        sum += person->share * *worths[grade];
+        shares += person->share;
     }
     if (finding.given) finding.worth = sum / shares;
     return finding;

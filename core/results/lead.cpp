@@ -6,7 +6,8 @@
 
 #include "core/decision/lookup.hpp"
 #include "core/measure/figures.hpp"
-#include "core/results/solve.hpp"
+#include "core/results/appraise.hpp"
+#include "core/results/solve_cache.hpp"
 
 namespace steelyard {
 namespace {
@@ -21,8 +22,8 @@ std::vector<double> scores_without(const Decision& decision, const Results& resu
     }
     without.requirements.clear();
     without.checks.clear();
-    without.settings.money.clear(); // Else this would ask for itself.
-    const Results then = solve(without);
+    SolveCache cache;
+    const Standing then = Appraiser(without, cache).standing();
     std::vector<double> scores(results.options.size(), 0.0);
     for (std::size_t k = 0; k < then.options.size(); ++k) {
         const auto at = std::find(results.options.begin(), results.options.end(), then.options[k]);

@@ -9,6 +9,7 @@
 #include "core/decision/decision.hpp"
 #include "core/decision/problem.hpp"
 #include "core/measure/musts.hpp"
+#include "core/results/group_result.hpp"
 
 /// Everything the solver says about a decision. Vectors over options follow `options` (the options in play,
 /// in the order of the file); vectors over the items of a set follow its `items`.
@@ -66,6 +67,10 @@ struct SetResult {
     std::vector<Misfit> misfits; ///< Worst first.
     Parts parts;                 ///< More than one where the set does not hang together.
     std::optional<FewestChangesResult> fewest_changes; ///< With corrections only.
+
+    /// Of the group, in sets of pairs: where two or more judges with a share connect the set by their own
+    /// judgments and do not all tie all items.
+    std::optional<Concordance> concordance;
 };
 
 struct NodeResult {
@@ -150,7 +155,6 @@ struct FieldChange {
 };
 
 struct Results {
-    std::string decision_sha256;
     Settings settings;
     std::vector<Id> options; ///< In play.
     std::vector<SetResult> sets;
@@ -172,6 +176,7 @@ struct Results {
     std::vector<MustResult> musts;
     std::vector<Exclusion> excluded;
     std::vector<OpenItem> open;
+    std::optional<GroupResult> group; ///< Where there are two or more judges.
     std::vector<Notice> notices;
 };
 

@@ -5,9 +5,6 @@
 #include <utility>
 
 #include "core/decision/lookup.hpp"
-#include "core/judgment/consistency.hpp"
-#include "core/judgment/misfits.hpp"
-#include "core/judgment/random_index.hpp"
 
 namespace steelyard {
 namespace {
@@ -27,48 +24,38 @@ std::array<Id, 3> named(const std::vector<Id>& items, const Triad& t) {
     return {items[t[0]], items[t[1]], items[t[2]]};
 }
 
-/// All that follows from one matrix.
-SetResult describe_matrix(const Id& set, const Id& by, const std::vector<Id>& items, const PairMatrix& pairs,
-                          const Settings& settings) {
+/// What is known of one matrix, with the items named.
+SetResult named_facts(const Id& set, const Id& by, const std::vector<Id>& items, const MatrixFacts& facts,
+                      Method method) {
     SetResult result;
     result.set = set;
     result.by = by;
     result.items = items;
-    const std::size_t n = items.size();
-    for (const auto& [i, j] : pairs.missing()) result.missing.push_back({items[i], items[j]});
-    if (const auto worst = koczkodaj_index(pairs)) {
-        result.koczkodaj = worst->index;
-        result.worst_triad = named(items, worst->triad);
+    for (const auto& [i, j] : facts.missing) result.missing.push_back({items[i], items[j]});
+    if (facts.worst_triad) {
+        result.koczkodaj = facts.worst_triad->index;
+        result.worst_triad = named(items, facts.worst_triad->triad);
     }
-    const CircularTriads circular = circular_triads(pairs);
-    for (const auto& triad : circular.strict) result.cycles.push_back(named(items, triad));
-    for (const auto& triad : circular.tied) result.tied_cycles.push_back(named(items, triad));
-    result.zeta = circular.zeta;
-
-    const auto parts = pairs.parts();
-    for (const auto& part : parts) {
+    for (const auto& triad : facts.circular.strict) result.cycles.push_back(named(items, triad));
+    for (const auto& triad : facts.circular.tied) result.tied_cycles.push_back(named(items, triad));
+    result.zeta = facts.circular.zeta;
+    for (const auto& part : facts.parts) {
         std::vector<Id> ids;
         for (const auto i : part) ids.push_back(items[i]);
         result.parts.push_back(std::move(ids));
     }
-    if (parts.size() > 1) return result;
-
-    const Completion completion = complete_optimally(pairs);
-    result.eigenvector = eigenvector_weights(completion);
-    result.geometric_mean = geometric_mean_weights(pairs);
-    result.column_average = column_average_weights(pairs);
-    result.weights = by_method(result, settings.method);
-    result.lambda_max = completion.principal.lambda;
-    if (result.weights) result.lambda_hand = lambda_by_hand(completion.matrix, *result.weights);
-    result.ci = consistency_index(completion.principal.lambda, n);
-    result.ri = random_index(settings.random_index, n, result.missing.size());
-    if (result.ri) result.cr = *result.ci / *result.ri;
-    result.gci = geometric_consistency_index(pairs);
-    const Method error_method =
-        settings.method == Method::column_average ? Method::eigenvector : settings.method;
-    for (const auto& m : misfits(pairs, settings.method, *by_method(result, error_method))) {
+    result.eigenvector = facts.eigenvector;
+    result.geometric_mean = facts.geometric_mean;
+    result.column_average = facts.column_average;
+    result.weights = by_method(result, method);
+    result.lambda_max = facts.lambda_max;
+    result.lambda_hand = facts.lambda_hand;
+    result.ci = facts.ci;
+    result.ri = facts.ri;
+    result.cr = facts.cr;
+    result.gci = facts.gci;
+    for (const auto& m : facts.misfits)
         result.misfits.push_back({items[m.i], items[m.j], m.given, m.implied});
-    }
     return result;
 }
 
@@ -103,7 +90,8 @@ std::string list_names(const Decision& decision, const Id& set, const std::vecto
 
 } // namespace
 
-SetSolver::SetSolver(const Decision& decision) : decision_(decision), judgments_(decision) {
+SetSolver::SetSolver(const Decision& decision, SetWeights& weights, SolveCache& cache)
+    : decision_(decision), weights_(weights), cache_(cache) {
     for (const auto& placed : placed_nodes(decision.criteria))
         pointers_.emplace_back(placed.node->id, placed.pointer);
 }
@@ -114,9 +102,9 @@ std::string SetSolver::pointer(const Id& node) const {
     return found == pointers_.end() ? std::string{} : found->second;
 }
 
-SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) const {
+SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) {
     const Settings& settings = decision_.settings;
-    const JudgedSet judged = judgments_.gather(node.id, items, node.is_leaf() && node.rate == RateBy::pairs);
+    const JudgedSet& judged = weights_.judged(node, items);
     SetSolution solution;
     const std::string at = pointer(node.id);
     const std::string set_name = "\"" + node_name(decision_, node.id) + "\"";
@@ -124,12 +112,12 @@ SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) con
         solution.notices.push_back({code, std::move(text), at});
     };
 
-    const PairMatrix combined = group_matrix(judged);
-    solution.entries.push_back(describe_matrix(node.id, Id{}, items, combined, settings));
-    for (const auto& judge : judged.judges) {
-        solution.entries.push_back(
-            describe_matrix(node.id, judge.person, items, judge_matrix(judge, judged.agreed), settings));
-    }
+    const auto describe = [&](const Id& by, const PairMatrix& matrix) {
+        const auto& facts = cache_.facts(matrix, settings.method, settings.random_index);
+        solution.entries.push_back(named_facts(node.id, by, items, facts, settings.method));
+    };
+    describe(Id{}, group_matrix(judged));
+    for (const auto& judge : judged.judges) describe(judge.person, judge_matrix(judge, judged.agreed));
     SetResult& group = solution.entries.front();
 
     if (settings.combine != Combine::judgments && !judged.judges.empty()) {
@@ -160,6 +148,7 @@ SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) con
         group.weights = by_method(group, settings.method);
     }
     group.open = open_pairs(decision_, group, judged);
+    group.concordance = concordance(judged, solution.entries);
 
     if (group.parts.size() > 1) {
         std::string parts;
@@ -189,51 +178,38 @@ SetSolution SetSolver::pairs(const Node& node, const std::vector<Id>& items) con
     return solution;
 }
 
-SetSolution SetSolver::options(const Node& leaf, const std::vector<Id>& in_play) const {
-    if (in_play.size() < decision_.options.size()) {
-        const auto connected = [&](const std::vector<Id>& items) {
-            return group_matrix(judgments_.gather(leaf.id, items, true)).connected();
-        };
-        const std::vector<Id> all = set_items(decision_, leaf.id);
-        if (!connected(in_play) && connected(all)) {
-            SetSolution solution = pairs(leaf, all);
-            solution.notices.push_back({"whole-set",
-                                        "In \"" + node_name(decision_, leaf.id) +
-                                            "\" the options in play are only linked through options that "
-                                            "take no part; those judgments count.",
-                                        pointer(leaf.id)});
-            return solution;
-        }
+/// Of the judges who connect the set by their own judgments and count for the group; their rankings are those
+/// of their entries, agreed judgments included.
+std::optional<Concordance> SetSolver::concordance(const JudgedSet& judged,
+                                                  const std::vector<SetResult>& entries) {
+    std::vector<std::vector<double>> ranks;
+    std::vector<Id> judges;
+    for (std::size_t k = 0; k < judged.judges.size(); ++k) {
+        const JudgeAnswers& judge = judged.judges[k];
+        const auto& weights = entries[k + 1].weights;
+        if (judge.share == 0 || !weights || !judge.own.connected()) continue;
+        judges.push_back(judge.person);
+        ranks.push_back(mean_ranks(*weights));
     }
-    return pairs(leaf, in_play);
+    const auto& found = cache_.concordance(ranks);
+    if (!found) return std::nullopt;
+    return Concordance{*found, std::move(judges)};
 }
 
-SetSolution SetSolver::points(const Node& node) const {
+SetSolution SetSolver::options(const Node& leaf, const std::vector<Id>& in_play) {
+    if (!weights_.needs_whole(leaf, in_play)) return pairs(leaf, in_play);
+    SetSolution solution = pairs(leaf, set_items(decision_, leaf.id));
+    solution.notices.push_back({"whole-set",
+                                "In \"" + node_name(decision_, leaf.id) +
+                                    "\" the options in play are only linked through options that "
+                                    "take no part; those judgments count.",
+                                pointer(leaf.id)});
+    return solution;
+}
+
+SetSolution SetSolver::points(const Node& node) {
     std::vector<Id> items;
     for (const auto& child : node.children) items.push_back(child.id);
-    const PointsEntry* agreed = nullptr;
-    std::vector<std::pair<const Person*, const PointsEntry*>> own;
-    for (const auto& entry : decision_.points) {
-        if (entry.set == node.id && entry.by.empty()) agreed = &entry;
-    }
-    for (const auto& person : decision_.people) {
-        const PointsEntry* last = nullptr;
-        for (const auto& entry : decision_.points) {
-            if (entry.set == node.id && entry.by == person.id) last = &entry;
-        }
-        if (last != nullptr) own.emplace_back(&person, last);
-    }
-    const auto normalised = [&](const PointsEntry& entry) {
-        Weights w(items.size(), 0.0);
-        double sum = 0;
-        for (const auto& [id, points] : entry.points) {
-            const auto at = std::find(items.begin(), items.end(), id) - items.begin();
-            w[static_cast<std::size_t>(at)] = points;
-            sum += points;
-        }
-        for (auto& x : w) x /= sum;
-        return w;
-    };
     const auto entry_of = [&](const Id& by, std::optional<Weights> weights) {
         SetResult result;
         result.set = node.id;
@@ -244,24 +220,11 @@ SetSolution SetSolver::points(const Node& node) const {
         return result;
     };
 
-    std::vector<Weights> weights;
-    std::vector<double> shares;
-    for (const auto& [person, entry] : own) {
-        if (person->share == 0) continue;
-        weights.push_back(normalised(*entry));
-        shares.push_back(person->share);
-    }
-    std::optional<Weights> group;
-    if (agreed != nullptr) {
-        group = normalised(*agreed);
-    } else if (!weights.empty()) {
-        group = combine_weights(weights, shares, true);
-    }
+    const GivenPoints given = weights_.given_points(node);
     SetSolution solution;
-    solution.entries.push_back(entry_of(Id{}, group));
-    for (const auto& [person, entry] : own) {
-        solution.entries.push_back(entry_of(person->id, normalised(agreed != nullptr ? *agreed : *entry)));
-    }
+    solution.entries.push_back(entry_of(Id{}, weights_.points(node)));
+    for (const auto& [person, own] : given.own)
+        solution.entries.push_back(entry_of(person->id, given.agreed ? *given.agreed : own));
     return solution;
 }
 

@@ -4,6 +4,7 @@
 #include <string_view>
 #include <utility>
 
+#include "core/decision/fingerprint.hpp"
 #include "core/decision/json_value.hpp"
 #include "core/decision/lookup.hpp"
 #include "core/decision/words.hpp"
@@ -96,6 +97,40 @@ JsonValue set_json(const SetResult& set, bool corrected) {
     }
     out.add("misfits", std::move(misfits));
     if (corrected) out.add("fewest_changes", fewest_changes_json(set.fewest_changes));
+    if (set.concordance) {
+        JsonValue concordance = JsonValue::object();
+        concordance.add("w", JsonValue::of(set.concordance->w))
+            .add("chi2", JsonValue::of(set.concordance->chi2));
+        concordance.add("p", JsonValue::of(set.concordance->p));
+        concordance.add("p_by", JsonValue::of(set.concordance->exact ? "exact" : "chi2"));
+        concordance.add("judges", ids(set.concordance->judges));
+        out.add("concordance", std::move(concordance));
+    }
+    return out;
+}
+
+JsonValue group_json(const GroupResult& group) {
+    JsonValue out = JsonValue::object();
+    out.add("judges", ids(group.judges));
+    out.add("kendall_w", group.concordance ? JsonValue::of(group.concordance->w) : JsonValue{});
+    JsonValue spreads = JsonValue::array();
+    for (const auto& spread : group.spreads) {
+        JsonValue one = JsonValue::object();
+        one.add("set", JsonValue::of(spread.set));
+        one.add("a", JsonValue::of(spread.a)).add("b", JsonValue::of(spread.b));
+        one.add("gsd", JsonValue::of(spread.gsd)).add("for", JsonValue::of(spread.in_favour));
+        one.add("equal", JsonValue::of(spread.equal)).add("against", JsonValue::of(spread.against));
+        one.add("furthest", ids(spread.furthest));
+        spreads.items.push_back(std::move(one));
+    }
+    out.add("spreads", std::move(spreads));
+    JsonValue without = JsonValue::array();
+    for (const auto& rest : group.without) {
+        JsonValue one = JsonValue::object();
+        one.add("person", JsonValue::of(rest.person)).add("ranks", by_id(rest.options, rest.ranks));
+        without.items.push_back(std::move(one));
+    }
+    out.add("without", std::move(without));
     return out;
 }
 
@@ -172,7 +207,7 @@ JsonValue field_json(const std::vector<FieldChange>& changes) {
 std::string write_results(const Decision& decision, const Results& results) {
     JsonValue out = JsonValue::object();
     out.add("format", JsonValue::of("steelyard-results")).add("version", JsonValue::of(1));
-    out.add("decision_sha256", JsonValue::of(results.decision_sha256));
+    out.add("decision_sha256", JsonValue::of(decision_sha256(decision)));
     out.add("settings", all_settings(results.settings));
 
     JsonValue sets = JsonValue::array();
@@ -212,6 +247,7 @@ std::string write_results(const Decision& decision, const Results& results) {
     }
     out.add("excluded", excluded_json(decision, results.excluded)).add("open", open_json(results.open));
     if (results.rates) out.add("rates", rates_json(*results.rates));
+    if (results.group) out.add("group", group_json(*results.group));
     if (results.field_changes) out.add("field_changes", field_json(*results.field_changes));
 
     JsonValue notices = JsonValue::array();

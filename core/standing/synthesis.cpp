@@ -36,6 +36,20 @@ std::vector<int> rank(const std::vector<double>& scores) {
     return ranks;
 }
 
+std::optional<std::size_t> first_of(const std::vector<double>& scores) {
+    if (scores.empty()) return std::nullopt;
+    return static_cast<std::size_t>(std::max_element(scores.begin(), scores.end()) - scores.begin());
+}
+
+std::optional<double> lead_of(std::size_t option, const std::vector<double>& scores) {
+    std::optional<double> best_other;
+    for (std::size_t o = 0; o < scores.size(); ++o) {
+        if (o != option && (!best_other || scores[o] > *best_other)) best_other = scores[o];
+    }
+    if (!best_other) return std::nullopt;
+    return 100 * (scores[option] - *best_other);
+}
+
 std::optional<std::vector<double>> shares_of(const std::vector<double>& scores) {
     const double sum = std::accumulate(scores.begin(), scores.end(), 0.0);
     if (!(sum > 0)) return std::nullopt;

@@ -27,6 +27,13 @@ std::vector<WeightedNode> weigh_tree(const Node& root, const CriteriaWeights& we
 /// Ranks from 1: one more than the number of options better by more than 1e-9; ties share a rank.
 std::vector<int> rank(const std::vector<double>& scores);
 
+/// Index of the highest score, the first of equals; none without scores.
+std::optional<std::size_t> first_of(const std::vector<double>& scores);
+
+/// Points of 100 by which one score leads the best other one, negative where it does not; none if it is
+/// alone.
+std::optional<double> lead_of(std::size_t option, const std::vector<double>& scores);
+
 /// Shares of the sum of scores; none if all are 0.
 std::optional<std::vector<double>> shares_of(const std::vector<double>& scores);
 

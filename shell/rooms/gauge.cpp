@@ -72,9 +72,9 @@ private:
     }
 
     void update(const RoomView& view) {
-        if (model_of_ != view.results.decision_sha256 || person_ != view.person || model_of_.empty()) {
+        if (model_of_ != view.revision || person_ != view.person) {
             model_ = make_model(view);
-            model_of_ = view.results.decision_sha256;
+            model_of_ = view.revision;
             person_ = view.person;
         }
         if (!wanted_.empty()) {
@@ -174,7 +174,7 @@ private:
     }
 
     Model model_;
-    std::string model_of_; ///< The state of the decision the model was made of.
+    std::uint64_t model_of_ = 0; ///< The revision the model was made of; none yet.
     Id person_;
     TableState table_;
     Id wanted_;

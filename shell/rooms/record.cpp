@@ -82,17 +82,16 @@ private:
     float draw_hash(Ui& ui, const RoomView& view, Actions& actions, ImVec2 at, float width) {
         GrowingCard card(ui, at, width);
         float y = card.heading("Hash of this decision (SHA-256)");
+        const std::string hash = view.sha256();
         y += draw_paragraph(
                  ui, {card.left(), y}, card.width(),
                  "Taken over all of it but the signatures; the log counts too. Any change gives another one.",
                  {.ink = ui.look().quiet}) +
              8;
-        y += draw_paragraph(ui, {card.left(), y}, card.width(),
-                            halves(view.results.decision_sha256, card.width())) +
-             10;
+        y += draw_paragraph(ui, {card.left(), y}, card.width(), halves(hash, card.width())) + 10;
         const Box copy{card.left(), y, button_width("Copy"), 32};
         if (button(ui, "record/copy-hash", "Copy", copy)) {
-            actions.copy(view.results.decision_sha256);
+            actions.copy(hash);
             actions.say("The hash is on the clipboard.");
         }
         return card.end(y + 32);

@@ -1,5 +1,6 @@
 #pragma once
 
+#include <cstdint>
 #include <functional>
 #include <memory>
 #include <optional>
@@ -28,6 +29,10 @@ struct RoomView {
     bool read_only = false; ///< Another page writes this decision; controls that edit are disabled.
     Answering answering = Answering::agreed;
     const Examination* examination = nullptr; ///< Of the set asked for by Actions::examine, as far as it is.
+    std::uint64_t revision = 0;               ///< Another one for every change of the open decision.
+
+    /// The decision's fingerprint. It takes a while: for what is drawn only while it is needed.
+    std::function<std::string()> sha256;
 };
 
 /// What a room asks for. Carried out after the frame.

@@ -44,7 +44,7 @@ GradeFinding found(const std::vector<GradeEntry>& entries, const std::vector<Per
                    const Worths& worths = {1, .6, 0}) {
     std::vector<const GradeEntry*> entered;
     for (const GradeEntry& e : entries) entered.push_back(&e);
-    return find_grade_worth(people, graded_leaf(), "o1", entered, worths);
+    return find_grade_worth(standing_grades(people, graded_leaf(), "o1", entered), worths);
 }
 
 std::optional<double> worth(const std::vector<GradeEntry>& entries,
@@ -106,6 +106,28 @@ TEST_CASE("grades: one grade without a worth that is needed leaves the option wi
     // Not needed where its giver does not count.
     CHECK(worth({entry("p1", "good"), entry("p2", "fair")}, {person("p1", 1), person("p2", 0)}, unknown) ==
           1);
+}
+
+TEST_CASE("grades: without a person, and with one person's alone") {
+    const std::vector<GradeEntry> entries{entry("p1", "good"), entry("p2", "fair")};
+    std::vector<const GradeEntry*> entered{&entries[0], &entries[1]};
+    const StandingGrades grades = standing_grades(one_to_three, graded_leaf(), "o1", entered);
+    const Worths worths{1, .6, 0};
+    const Person* p1 = &one_to_three[0];
+    const Person* p2 = &one_to_three[1];
+    CHECK_THAT(find_grade_worth(grades, worths, p2).worth.value(), WithinAbs(1, 1e-15));
+    CHECK(find_grade_worth(grades, worths, nullptr, p2).worth == .6);
+    // One who gave none speaks with all; without the only one who did nothing is left.
+    entered.pop_back();
+    const StandingGrades single = standing_grades(one_to_three, graded_leaf(), "o1", entered);
+    CHECK(find_grade_worth(single, worths, nullptr, p2).worth == 1);
+    CHECK_FALSE(find_grade_worth(single, worths, p1).given);
+    // An agreed grade stands whoever is left out.
+    const GradeEntry agreed = entry("", "poor");
+    entered.push_back(&agreed);
+    const StandingGrades settled = standing_grades(one_to_three, graded_leaf(), "o1", entered);
+    CHECK(find_grade_worth(settled, worths, p1).worth == 0);
+    CHECK(find_grade_worth(settled, worths, nullptr, p1).worth == 0);
 }
 
 } // namespace steelyard

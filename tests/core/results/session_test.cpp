@@ -1,5 +1,6 @@
 #include <catch_amalgamated.hpp>
 
+#include "core/decision/fingerprint.hpp"
 #include "core/decision/read.hpp"
 #include "core/results/session.hpp"
 
@@ -23,18 +24,20 @@ TEST_CASE("results are solved once for a revision and anew after a change, an un
     Session session(price_only());
     const Results* first = &session.results();
     CHECK(first->ranks == std::vector{1, 2});
-    const std::string sha = first->decision_sha256;
+    const std::string sha = session.sha256();
     CHECK(&session.results() == first);
 
     session.apply({Enter<Figure>{{.criterion = "price", .option = "a", .value = 40}}}, {});
     CHECK(session.results().ranks == std::vector{2, 1});
-    CHECK(session.results().decision_sha256 != sha);
+    CHECK(session.sha256() != sha);
+    CHECK(session.sha256() == decision_sha256(session.decision()));
     session.undo({});
     CHECK(session.results().ranks == std::vector{1, 2});
 
     Decision other = price_only();
     other.options[0].withdrawn = true;
     session.open(other);
+    CHECK(session.sha256() == decision_sha256(other));
     CHECK(session.results().options == std::vector<Id>{"b"});
     CHECK(session.history().undo_label().empty());
 }
