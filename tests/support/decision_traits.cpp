@@ -188,6 +188,30 @@ void note_sets(const Decision& decision, const SlowResults& results, Traits& tra
     note(traits, decision.settings.synthesis == Synthesis::ideal && !results.ranges.empty(), "ranges");
 }
 
+void note_group(const Decision& decision, const SlowResults& results, Traits& traits) {
+    if (!results.group) return;
+    traits.insert("several judges");
+    note(traits, results.group->spreads.empty(), "judges without a common pair");
+    for (const SlowSpread& spread : results.group->spreads) {
+        note(traits, spread.ratios.size() > 2, "spread over three");
+        note(traits, spread.in_favour > 0 && spread.against > 0, "sides taken");
+        note(traits, spread.equal > 0, "equal for somebody");
+    }
+    for (const auto& [judge, ranks] : results.group->without) {
+        note(traits, ranks != results.ranks, "another ranking without a judge");
+        note(traits, ranks.size() != results.ranks.size(), "another field without a judge");
+        for (const auto& [option, rank] : results.ranks)
+            note(traits, rank == 1 && (ranks.count(option) == 0 || ranks.at(option) != 1),
+                 "first place moves without a judge");
+    }
+    for (const Id& judge : results.group->judges)
+        note(traits,
+             std::none_of(results.sets.begin(), results.sets.end(),
+                          [&](const SlowSet& set) { return set.by == judge; }),
+             "judge by grades alone");
+    note(traits, results.group->judges.size() < decision.people.size(), "person who is no judge");
+}
+
 } // namespace
 
 std::set<std::string> traits(const Decision& decision, const SlowResults& results) {
@@ -200,6 +224,7 @@ std::set<std::string> traits(const Decision& decision, const SlowResults& result
     note_figures(decision, traits);
     note_requirements(decision, results, traits);
     note_sets(decision, results, traits);
+    note_group(decision, results, traits);
     for (const auto& [id, leaf] : results.leaves) {
         note(traits, leaf.all_zero, "all worth 0, " + std::string(word(decision.settings.synthesis)));
         note(traits, !leaf.missing.empty() && leaf.missing.size() < results.options.size(),

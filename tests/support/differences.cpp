@@ -22,12 +22,6 @@ std::string shown(double value) {
 std::string shown(const std::string& value) {
     return value;
 }
-template<class T>
-std::string shown(const T& list) {
-    std::string text = "[";
-    for (const auto& each : list) text += shown(each) + " ";
-    return text + "]";
-}
 std::string shown(bool value) {
     return value ? "yes" : "no";
 }
@@ -36,6 +30,12 @@ std::string shown(int value) {
 }
 std::string shown(std::size_t value) {
     return std::to_string(value);
+}
+template<class T>
+std::string shown(const T& list) {
+    std::string text = "[";
+    for (const auto& each : list) text += shown(each) + " ";
+    return text + "]";
 }
 
 class Comparison {
@@ -299,6 +299,51 @@ void compare_open(Comparison& compare, const Results& core, const SlowResults& s
             compare.found.push_back("open: " + told(core.open[i]) + " stands too late");
 }
 
+void compare_spread(Comparison& compare, const Spread& core, const SlowSpread& slow) {
+    const std::string where = "spread " + slow.set + " " + slow.a + "-" + slow.b + " ";
+    compare.same(where + "place", std::vector<Id>{core.set, core.a, core.b},
+                 std::vector<Id>{slow.set, slow.a, slow.b});
+    compare.number(where + "gsd", core.gsd, slow.gsd, exact_tolerance);
+    compare.same(where + "sides", std::vector<int>{core.in_favour, core.equal, core.against},
+                 std::vector<int>{slow.in_favour, slow.equal, slow.against});
+    const auto logarithm = [&](const Id& judge) { return std::log(slow.ratios.at(judge)); };
+    double furthest = 0;
+    for (const auto& [p, r] : slow.ratios)
+        for (const auto& [q, s] : slow.ratios)
+            furthest = std::max(furthest, std::abs(logarithm(p) - logarithm(q)));
+    compare.number(where + "furthest", std::abs(logarithm(core.furthest[0]) - logarithm(core.furthest[1])),
+                   furthest, exact_tolerance);
+    compare.same(where + "two judges", core.furthest[0] < core.furthest[1], true); // p1, p2 and so on.
+}
+
+void compare_group(Comparison& compare, const Results& core, const SlowResults& slow) {
+    compare.same("group exists", core.group.has_value(), slow.group.has_value());
+    if (!core.group || !slow.group) return;
+    compare.same("judges", core.group->judges, slow.group->judges);
+    compare.same("spreads", core.group->spreads.size(), slow.group->spreads.size());
+    if (core.group->judges != slow.group->judges || core.group->spreads.size() != slow.group->spreads.size())
+        return;
+    for (std::size_t i = 0; i < slow.group->spreads.size(); ++i)
+        compare_spread(compare, core.group->spreads[i], slow.group->spreads[i]);
+    // With fewer answers more sets are incomplete.
+    for (const JudgeRanking& ranking : core.group->rankings)
+        for (std::size_t o = 0; o < slow.options.size(); ++o)
+            compare.number("score of " + slow.options[o] + " by " + ranking.person, ranking.scores[o],
+                           slow.group->scores.at(ranking.person).at(slow.options[o]), completed_tolerance);
+    for (const WithoutJudge& without : core.group->without) {
+        std::map<Id, int> ranks;
+        for (std::size_t o = 0; o < without.options.size(); ++o) ranks[without.options[o]] = without.ranks[o];
+        const std::map<Id, int>& expected = slow.group->without.at(without.person);
+        compare.same("ranks without " + without.person, ranks == expected, true);
+        bool moves = !expected.empty();
+        if (core.first) {
+            const auto rank = expected.find(core.options[*core.first]);
+            moves = rank == expected.end() || rank->second != 1;
+        }
+        compare.same("first place moves without " + without.person, without.first_moves, moves);
+    }
+}
+
 } // namespace
 
 std::vector<std::string> differences(const Decision& decision, const Results& core, const SlowResults& slow) {
@@ -312,6 +357,7 @@ std::vector<std::string> differences(const Decision& decision, const Results& co
         compare_nodes(compare, decision, core, slow, tolerance);
         compare_leaves(compare, core, slow, tolerance);
         compare_scores(compare, core, slow, tolerance);
+        compare_group(compare, core, slow);
     }
     compare_musts(compare, core, slow);
     compare_open(compare, core, slow);

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 
+#include "tests/support/slow_group.hpp"
 #include "tests/support/slow_sets.hpp"
 #include "tests/support/slow_standing.hpp"
 #include "tests/support/slow_values.hpp"
@@ -152,6 +153,7 @@ SlowResults slow_solve(const Decision& decision) {
     rank(results);
     if (decision.settings.synthesis == Synthesis::ideal) find_ranges(results);
     list_open(decision, results);
+    results.group = slow_group(decision, results);
     return results;
 }
 

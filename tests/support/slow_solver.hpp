@@ -47,6 +47,22 @@ struct SlowLeaf {
     bool all_zero = false;      ///< Everything that has a worth here is worth 0.
 };
 
+/// What two or more judges said of one pair on which nothing was agreed; a before b in the items.
+struct SlowSpread {
+    Id set, a, b;
+    std::map<Id, double> ratios; ///< By judge.
+    double gsd = 1;
+    int in_favour = 0, equal = 0, against = 0;
+};
+
+/// What several judges make of a decision.
+struct SlowGroup {
+    std::vector<Id> judges;
+    std::map<Id, std::map<Id, double>> scores; ///< By judge and option: with the judge's answers alone.
+    std::vector<SlowSpread> spreads;
+    std::map<Id, std::map<Id, int>> without; ///< By judge and option: ranks without the judge's answers.
+};
+
 struct SlowResults {
     std::vector<Id> options;   ///< In play.
     std::vector<SlowSet> sets; ///< In tree order, each with its group first and then the judges.
@@ -62,6 +78,7 @@ struct SlowResults {
     std::map<std::array<Id, 2>, MustState> musts; ///< Option, requirement.
     std::vector<Exclusion> excluded;
     std::vector<OpenItem> open;
+    std::optional<SlowGroup> group; ///< Where there are two or more judges.
 };
 
 /// The decision must be valid.

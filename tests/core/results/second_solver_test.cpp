@@ -96,6 +96,17 @@ const std::map<std::string, int>& wanted() {
         {"cycle", 100},
         {"tied cycle", 100},
         {"zeta below 1", 50},
+        // several judges
+        {"several judges", 300},
+        {"judges without a common pair", 50},
+        {"spread over three", 200},
+        {"sides taken", 200},
+        {"equal for somebody", 200},
+        {"another ranking without a judge", 200},
+        {"another field without a judge", 10},
+        {"first place moves without a judge", 100},
+        {"judge by grades alone", 20},
+        {"person who is no judge", 100},
         // figures, cost sheets, grades
         {"rate pairs", 300},
         {"rate figure", 300},
