@@ -1,5 +1,6 @@
 #include "shell/app_state.hpp"
 
+#include <algorithm>
 #include <utility>
 
 #include "core/decision/lookup.hpp"
@@ -35,14 +36,19 @@ bool App::State::is_example() const {
 RoomView App::State::view() {
     if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
     const bool examined = examination && examined_revision == session.revision();
-    return {session.decision(),
-            session.results(),
-            person,
-            keeper.read_only(),
-            answering,
-            examined ? &examination->found() : nullptr,
-            session.revision(),
-            [this] { return session.sha256(); }};
+    const bool differed = differing && differing_revision == session.revision();
+    return {.decision = session.decision(),
+            .results = session.results(),
+            .person = person,
+            .read_only = keeper.read_only(),
+            .answering = answering,
+            .disagreements = differed ? &differing->found() : nullptr,
+            .disagreement_progress = !differed       ? 0
+                                     : all_differing ? 1
+                                                     : std::min(differing->progress(), 0.99),
+            .examination = examined ? &examination->found() : nullptr,
+            .revision = session.revision(),
+            .sha256 = [this] { return session.sha256(); }};
 }
 
 void App::State::open(Decision decision, const std::string& key, std::uint64_t stored_revision,
@@ -175,6 +181,7 @@ void App::State::carry_out(Actions& actions) {
         fresh_frames = 2;
     }
     examine(actions.to_examine);
+    weigh_disagreements(actions.disagreements_wanted);
 }
 
 void App::State::examine(const Actions::Examined& wish) {
@@ -194,6 +201,24 @@ void App::State::examine(const Actions::Examined& wish) {
     while (!examination->found().finished && platform.milliseconds() - begun < budget) examination->step();
     if (!examination->found().finished) fresh_frames = 2;
     if (!same) fresh_frames = 2;
+}
+
+void App::State::weigh_disagreements(bool wanted) {
+    if (!wanted) {
+        differing.reset();
+        return;
+    }
+    const bool same = differing && differing_revision == session.revision();
+    if (!same) {
+        differing.emplace(session.decision(), session.results(), session.cache());
+        differing_revision = session.revision();
+        all_differing = false;
+    }
+    if (all_differing) return;
+    constexpr double budget = 6; // As for examine().
+    const double begun = platform.milliseconds();
+    while (!all_differing && platform.milliseconds() - begun < budget) all_differing = !differing->step();
+    fresh_frames = 2;
 }
 
 void App::State::apply(Actions::Step step) {

@@ -39,6 +39,9 @@ struct App::State {
     Answering answering = Answering::agreed;
     std::optional<ExaminationJob> examination;
     std::uint64_t examined_revision = 0;
+    std::optional<DisagreementSearch> differing;
+    bool all_differing = false; ///< The search is through.
+    std::uint64_t differing_revision = 0;
     bool started = false;
     bool standing_open = false; ///< On narrow pages: the standing is laid over the room.
 
@@ -64,6 +67,7 @@ struct App::State {
     void save_results();
     void carry_out(Actions& actions);
     void examine(const Actions::Examined& wish);
+    void weigh_disagreements(bool wanted);
     void apply(Actions::Step step);
     void undo();
     void redo();

@@ -13,10 +13,11 @@
 #include "core/judgment/fewest_changes.hpp"
 #include "core/judgment/judged_set.hpp"
 #include "core/judgment/random_index.hpp"
+#include "core/results/appraise.hpp"
 #include "core/results/corrections.hpp"
 #include "core/results/enough.hpp"
 #include "core/results/entry_matrix.hpp"
-#include "core/results/solve.hpp"
+#include "core/results/solve_cache.hpp"
 
 namespace steelyard {
 namespace {
@@ -238,7 +239,7 @@ struct ExaminationJob::Work {
         double ratio;
     };
 
-    StandingThen standing_with(const std::vector<Entered>& entered) const {
+    StandingThen standing_with(const std::vector<Entered>& entered) {
         std::vector<Edit> edits;
         for (const auto& e : entered) {
             Judgment judgment;
@@ -252,9 +253,10 @@ struct ExaminationJob::Work {
         const Applied applied = steelyard::apply(decision, edits);
         StandingThen then;
         if (!applied.problems.empty()) return then;
-        const Results solved = solve(applied.decision);
-        if (solved.first) then.first = solved.options[*solved.first];
-        then.lead_points = solved.lead_points;
+        const Standing standing = Appraiser(applied.decision, cache).standing();
+        if (!standing.first) return then;
+        then.first = standing.options[*standing.first];
+        then.lead_points = lead_of(*standing.first, standing.scores);
         return then;
     }
 
@@ -293,6 +295,7 @@ struct ExaminationJob::Work {
 
     Decision decision;
     Results results;
+    SolveCache cache; ///< Sets that a correction does not touch are weighed once.
     const SetResult* entry = nullptr;
     PairMatrix pairs{0};
     bool over = false;

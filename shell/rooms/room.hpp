@@ -9,6 +9,7 @@
 #include <vector>
 
 #include "core/decision/edit.hpp"
+#include "core/results/disagreements.hpp"
 #include "core/results/examination.hpp"
 #include "core/results/results.hpp"
 #include "shell/ui.hpp"
@@ -28,6 +29,8 @@ struct RoomView {
     Id person;              ///< Who answers now; empty: agreed in the room.
     bool read_only = false; ///< Another page writes this decision; controls that edit are disabled.
     Answering answering = Answering::agreed;
+    const std::vector<Disagreement>* disagreements = nullptr; ///< As far as they are worked out.
+    double disagreement_progress = 0;                         ///< 0 to 1.
     const Examination* examination = nullptr; ///< Of the set asked for by Actions::examine, as far as it is.
     std::uint64_t revision = 0;               ///< Another one for every change of the open decision.
 
@@ -55,6 +58,9 @@ public:
     void examine(Id set, Id by) { to_examine = {std::move(set), std::move(by), true}; }
     void say(std::string text) { message = std::move(text); }
 
+    /// Works out what the judges' disagreements do to the standing, in the same way.
+    void weigh_disagreements() { disagreements_wanted = true; }
+
     struct Step {
         std::vector<Edit> edits;
         std::string label;
@@ -78,6 +84,7 @@ public:
     Answers answers;
     std::optional<Answering> answering;
     Examined to_examine;
+    bool disagreements_wanted = false;
     std::string to_copy;
     std::string message;
 };
