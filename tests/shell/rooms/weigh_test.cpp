@@ -120,8 +120,9 @@ TEST_CASE("a person's answers are his own, and what is agreed stands beside them
     page.settle();
     page.click("Judge 2", "option");
     page.settle();
-    CHECK(page.find("Answering as Judge 2 \xC2\xB7 agreed in the room: 3, which stands in place of this") !=
-          nullptr);
+    page.click("Criterion A against Criterion B", "gridcell");
+    CHECK(page.find("Agreed in the room: Criterion A counts 3 times as much as Criterion B. That stands in "
+                    "place of your answer.") != nullptr);
     page.key(ImGuiKey_5);
     const Decision d = stored(page);
     CHECK(said_ratio(d, "goal", "", "c0", "c1") == 3);
