@@ -220,11 +220,14 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
     ImGui::SetCursorScreenPos(box.at());
     ImGui::PushID(id.data(), id.data() + id.size());
     ImGui::BeginDisabled(!state.enabled);
+    ImGui::InvisibleButton("arm", {box.w, box.h});
     if (ui.focus_next == id) {
-        ImGui::SetKeyboardFocusHere();
+        // At once: a request for the next frame is dropped where what has the focus now is drawn after this,
+        // in a scrolled area.
+        ImGui::SetFocusID(ImGui::GetItemID(), ImGui::GetCurrentWindow());
+        ImGui::ScrollToItem(ImGuiScrollFlags_KeepVisibleEdgeY);
         ui.focus_next.clear();
     }
-    ImGui::InvisibleButton("arm", {box.w, box.h});
     const Hand hand{ImGui::IsItemActive(), ImGui::IsItemDeactivated()};
     const bool focused = ImGui::IsItemFocused();
     if (state.enabled && focused) read_keys(state, memory, answer);
