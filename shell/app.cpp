@@ -17,6 +17,7 @@ constexpr float header_height = 52;
 constexpr float line_height_below = 44;
 constexpr float bar_height = 44;
 constexpr float standing_width = 276;
+constexpr float sealed_bar_height = 34;
 
 /// Below this width the standing folds away behind a button; below the second the rail shrinks.
 constexpr float wide_page = 1080;
@@ -90,7 +91,9 @@ void App::draw() {
             draw_problem_bar(s, page.take_top(bar_height));
         draw_line_below(s, view, actions, page.take_bottom(line_height_below));
         draw_rail(s, view, page.take_left(page.w >= middle_page ? 132.0f : 104.0f));
-        const bool standing = s.room != RoomId::standing && (wide || s.standing_open);
+        if (view.sealed()) draw_sealed_bar(s, actions, page.take_top(sealed_bar_height));
+        const bool standing =
+            s.room != RoomId::standing && !view.sealed() && s.handing_to.empty() && (wide || s.standing_open);
         if (standing) {
             const Box panel = page.take_right(std::min(standing_width, page.w));
             ui.ledger.set_room("frame");
@@ -100,7 +103,16 @@ void App::draw() {
             static constexpr std::array names{"frame", "weigh", "gauge", "standing", "tipping", "record"};
             ui.ledger.set_room(names[static_cast<std::size_t>(s.room)]);
             ImGui::PushID(names[static_cast<std::size_t>(s.room)]);
-            s.rooms[static_cast<std::size_t>(s.room)]->draw(ui, view, actions, page.inset(18));
+            const bool folded = view.sealed() && (s.room == RoomId::standing || s.room == RoomId::tipping ||
+                                                  s.room == RoomId::record);
+            if (!s.handing_to.empty())
+                draw_begin_card(s, view, page.inset(18));
+            else if (s.opening)
+                draw_opening_card(s, view, page.inset(18));
+            else if (folded)
+                draw_folded_card(s, actions, page.inset(18));
+            else
+                s.rooms[static_cast<std::size_t>(s.room)]->draw(ui, view, actions, page.inset(18));
             ImGui::PopID();
         }
         ui.ledger.set_room("frame");
@@ -128,6 +140,7 @@ void App::paste_text(const std::string& text) {
     if (!s.started || s.keeper.read_only()) return;
     Actions actions;
     s.fresh_frames = 2;
+    if (!s.handing_to.empty() || s.opening) return;
     s.rooms[static_cast<std::size_t>(s.room)]->paste(text, s.view(), actions);
     s.carry_out(actions);
 }

@@ -62,7 +62,9 @@ void draw_header(App::State& state, Actions& actions, Box box) {
     }
     draw_text(ui, {file.x + 12, middle(file, Font::body)}, "File", {.ink = theme.steel});
 
-    std::vector<std::string> answering{"Agreed in the room"};
+    std::vector<std::string> answering{state.answering == Answering::alone   ? "Nobody yet"
+                                       : state.answering == Answering::hands ? "Show of hands"
+                                                                             : "Agreed in the room"};
     std::size_t chosen = 0;
     for (const auto& p : d.people) {
         if (p.id == state.person) chosen = answering.size();
@@ -80,7 +82,7 @@ void draw_header(App::State& state, Actions& actions, Box box) {
         state.redo();
     if (button(ui, "undo", "\xE2\x86\xB6", undo, ButtonKind::quiet, !history.undo_label().empty()))
         state.undo();
-    if (box.w < 1080 && state.room != RoomId::standing) {
+    if (box.w < 1080 && state.room != RoomId::standing && state.answering != Answering::alone) {
         const Box toggle = right.take_right(92, 10);
         if (button(ui, "standing-toggle", "Standing", toggle, ButtonKind::quiet)) {
             state.standing_open = !state.standing_open;
@@ -121,6 +123,8 @@ void draw_rail(App::State& state, const RoomView& view, Box box) {
         const std::string name = room_name(room);
         if (press_area(ui, "room/" + name, name, tab, "tab", here ? "true" : "false")) {
             state.room = room;
+            state.handing_to.clear();
+            state.opening.reset();
             state.fresh_frames = 2;
         }
         const bool two_lines = count > 0 && tab.h >= 40;

@@ -7,6 +7,7 @@
 #include "core/decision/read.hpp"
 #include "core/results/write_results.hpp"
 #include "shell/example.hpp"
+#include "shell/sealed_results.hpp"
 
 namespace steelyard {
 namespace {
@@ -35,10 +36,13 @@ bool App::State::is_example() const {
 
 RoomView App::State::view() {
     if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
-    const bool examined = examination && examined_revision == session.revision();
-    const bool differed = differing && differing_revision == session.revision();
+    if (!handing_to.empty() && find_person(session.decision(), handing_to) == nullptr) handing_to.clear();
+    // Both tell of the standing, or of others.
+    const bool open = answering != Answering::alone;
+    const bool examined = open && examination && examined_revision == session.revision();
+    const bool differed = open && differing && differing_revision == session.revision();
     return {.decision = session.decision(),
-            .results = session.results(),
+            .results = seen_results(),
             .person = person,
             .read_only = keeper.read_only(),
             .answering = answering,
@@ -51,10 +55,20 @@ RoomView App::State::view() {
             .sha256 = [this] { return session.sha256(); }};
 }
 
+const Results& App::State::seen_results() {
+    if (answering != Answering::alone) return session.results();
+    if (sealed_revision != session.revision() || sealed_for != person) {
+        sealed = sealed_results(session.results(), session.decision(), person);
+        sealed_revision = session.revision();
+        sealed_for = person;
+    }
+    return sealed;
+}
+
 void App::State::open(Decision decision, const std::string& key, std::uint64_t stored_revision,
                       const std::string& stored_at) {
     session.open(std::move(decision));
-    person.clear();
+    change_answering(Answering::agreed);
     asked.reset();
     for (auto& r : rooms) r->reset();
     ui.drafts.clear();
@@ -171,8 +185,24 @@ void App::State::save_results() {
 
 void App::State::carry_out(Actions& actions) {
     if (!actions.message.empty()) message = std::move(actions.message);
-    if (actions.answers.wanted) person = actions.answers.person;
-    if (actions.answering) answering = *actions.answering;
+    if (actions.answering && *actions.answering != answering) {
+        if (answering == Answering::alone) {
+            opening = *actions.answering;
+            handing_to.clear();
+        } else {
+            change_answering(*actions.answering);
+        }
+        fresh_frames = 2;
+    }
+    if (actions.answers.wanted) {
+        // Leaving the seat is no question; taking it is.
+        if (actions.answers.person.empty())
+            seat({});
+        else if (actions.answers.person != person)
+            handing_to = actions.answers.person;
+        opening.reset();
+        fresh_frames = 2;
+    }
     if (!actions.to_copy.empty()) platform.copy_text(actions.to_copy);
     for (auto& step : actions.steps) apply(std::move(step));
     if (actions.go_to.wanted) {
@@ -182,6 +212,22 @@ void App::State::carry_out(Actions& actions) {
     }
     examine(actions.to_examine);
     weigh_disagreements(actions.disagreements_wanted);
+}
+
+void App::State::seat(Id next) {
+    person = std::move(next);
+    handing_to.clear();
+    own_steps = own_undone = 0;
+    message.clear();
+    ui.drafts.clear();
+    fresh_frames = 2;
+}
+
+void App::State::change_answering(Answering way) {
+    sealed_revision = 0;
+    answering = way;
+    opening.reset();
+    seat({});
 }
 
 void App::State::examine(const Actions::Examined& wish) {
@@ -234,6 +280,8 @@ void App::State::apply(Actions::Step step) {
     const auto outcome = session.apply(step.edits, when, std::move(step.label));
     if (!outcome.problems.empty()) message = sentence(outcome.problems.front());
     if (outcome.changed) {
+        ++own_steps;
+        own_undone = 0;
         message.clear();
         platform.set_title(session.decision().title);
     }
@@ -241,16 +289,28 @@ void App::State::apply(Actions::Step step) {
 
 void App::State::undo() {
     if (keeper.read_only()) return;
-    const std::string label = session.history().undo_label();
-    if (session.undo(stamp())) message = "Undone: " + label;
     fresh_frames = 2;
+    const std::string label = session.history().undo_label();
+    if (answering == Answering::alone && own_steps == 0) {
+        if (!label.empty())
+            message = "What was done before the hand-over is not undone while answers are sealed.";
+        return;
+    }
+    if (!session.undo(stamp())) return;
+    message = "Undone: " + label;
+    --own_steps;
+    ++own_undone;
 }
 
 void App::State::redo() {
     if (keeper.read_only()) return;
-    const std::string label = session.history().redo_label();
-    if (session.redo(stamp())) message = "Done again: " + label;
     fresh_frames = 2;
+    if (answering == Answering::alone && own_undone == 0) return;
+    const std::string label = session.history().redo_label();
+    if (!session.redo(stamp())) return;
+    message = "Done again: " + label;
+    ++own_steps;
+    --own_undone;
 }
 
 } // namespace steelyard

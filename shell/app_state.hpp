@@ -37,6 +37,13 @@ struct App::State {
     RoomId room = RoomId::frame;
     Id person; ///< Who answers now; empty: agreed in the room.
     Answering answering = Answering::agreed;
+    Id handing_to;                    ///< Asked to say that it is he, before he can answer.
+    std::optional<Answering> opening; ///< Asked whether what is sealed shall be opened, to go on like this.
+    Results sealed; ///< What may be seen while answers are sealed, for the revision and the person below.
+    std::uint64_t sealed_revision = 0;
+    Id sealed_for;
+    int own_steps = 0; ///< Made since the hand-over: while sealed no others are undone.
+    int own_undone = 0;
     std::optional<ExaminationJob> examination;
     std::uint64_t examined_revision = 0;
     std::optional<DisagreementSearch> differing;
@@ -57,6 +64,7 @@ struct App::State {
 
     bool is_example() const;
     RoomView view();
+    const Results& seen_results();
     void open(Decision decision, const std::string& key, std::uint64_t stored_revision,
               const std::string& stored_at);
     void open_file(const std::string& name, const std::string& text);
@@ -66,6 +74,9 @@ struct App::State {
     void save_file();
     void save_results();
     void carry_out(Actions& actions);
+    /// Seats a person (nobody, where empty); nothing half-typed or said before is left to see.
+    void seat(Id next);
+    void change_answering(Answering way);
     void examine(const Actions::Examined& wish);
     void weigh_disagreements(bool wanted);
     void apply(Actions::Step step);
@@ -82,5 +93,14 @@ void draw_problem_bar(App::State& state, Box box);
 void draw_line_below(App::State& state, const RoomView& view, Actions& actions, Box box);
 void draw_standing(Ui& ui, const RoomView& view, Box box);
 void draw_dialogs(App::State& state);
+
+/// In place of a room: the person named says that it is he.
+void draw_begin_card(App::State& state, const RoomView& view, Box area);
+/// In place of a room: whether what is sealed shall be opened.
+void draw_opening_card(App::State& state, const RoomView& view, Box area);
+/// In place of a room that shows what follows from all answers.
+void draw_folded_card(App::State& state, Actions& actions, Box area);
+/// One line that says what is folded away.
+void draw_sealed_bar(App::State& state, Actions& actions, Box box);
 
 } // namespace steelyard

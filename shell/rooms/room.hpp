@@ -36,6 +36,9 @@ struct RoomView {
 
     /// The decision's fingerprint. It takes a while: for what is drawn only while it is needed.
     std::function<std::string()> sha256;
+
+    /// Nobody but the one who answers may be seen, and nothing that follows from what the others said.
+    bool sealed() const { return answering == Answering::alone; }
 };
 
 /// What a room asks for. Carried out after the frame.
@@ -50,7 +53,11 @@ public:
     /// Another room, showing the item with this id (a set, a criterion, an option) if not empty.
     void go(RoomId room, Id focus = {}) { go_to = {room, std::move(focus), true}; }
     void copy(std::string text) { to_copy = std::move(text); }
+
+    /// Hands over to a person, who says first that it is he; or to nobody, where `person` is empty.
     void answer_as(Id person) { answers = {std::move(person), true}; }
+
+    /// Another way of answering, with nobody chosen. Answers that are sealed are opened only after a question.
     void answer_by(Answering way) { answering = way; }
 
     /// Looks into the answers of `by` (empty: the group) in a set, a slice in each frame, as long as it is

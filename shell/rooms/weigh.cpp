@@ -1,12 +1,16 @@
 #include <algorithm>
+#include <set>
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_grid.hpp"
+#include "shell/rooms/weigh_hands.hpp"
 #include "shell/rooms/weigh_hold.hpp"
 #include "shell/rooms/weigh_pair.hpp"
+#include "shell/rooms/weigh_people.hpp"
 #include "shell/rooms/weigh_points.hpp"
 #include "shell/rooms/weigh_sets.hpp"
+#include "shell/rooms/weigh_together.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
@@ -25,21 +29,22 @@ public:
             return;
         }
         const SetResult entry = own_entry(view, set_);
-        choose_pair(view, entry);
+        const SetResult& group = *group_entry(view.results, set_);
+        choose_pair(view, entry, group);
 
         // Short or narrow pages scroll as a whole; the list of sets becomes one to drop down.
         const bool narrow = area.w < 700;
-        const float least = narrow ? 880.0f : 590.0f;
+        const float head = head_height(view, area.w);
+        const float least = narrow ? 880.0f + head : 552.0f + (head > 0 ? head + 10 : 0);
         if (narrow || area.h < least) {
             ScrollArea scroll(ui, "weigh", area);
             Box inner = scroll.inner();
             inner.w -= 4;
             inner.h = std::max(area.h, least);
-            if (narrow) draw_set_choice(ui, view, inner.take_top(36, 12));
-            draw_work(ui, view, actions, entry, inner, narrow);
+            draw_all(ui, view, actions, entry, inner, narrow);
             scroll.reach(inner.bottom());
         } else {
-            draw_work(ui, view, actions, entry, area, false);
+            draw_all(ui, view, actions, entry, area, false);
         }
     }
 
@@ -53,6 +58,10 @@ public:
         set_.clear();
         pair_ = {};
         card_.reset();
+        together_.reset();
+        hands_.reset();
+        revealed_.clear();
+        everybody_ = false;
         grid_.reset();
         hold_.reset();
         points_.reset();
@@ -67,7 +76,7 @@ private:
         pair_ = {};
     }
 
-    void choose_pair(const RoomView& view, const SetResult& entry) {
+    void choose_pair(const RoomView& view, const SetResult& entry, const SetResult& group) {
         const auto holds = [&](const Id& id) {
             return std::find(entry.items.begin(), entry.items.end(), id) != entry.items.end();
         };
@@ -75,14 +84,23 @@ private:
         const int frame = ImGui::GetFrameCount();
         const bool away = frame > last_frame_ + 1;
         last_frame_ = frame;
-        const bool same =
-            holds(pair_[0]) && holds(pair_[1]) && shown_set_ == set_ && shown_person_ == view.person;
-        if (same && away) card_.fresh();
+        const bool same = holds(pair_[0]) && holds(pair_[1]) && shown_set_ == set_ &&
+                          shown_person_ == view.person && shown_way_ == view.answering;
+        if (same && away) fresh();
         if (same) return;
+        if (shown_way_ != view.answering) revealed_.clear();
         shown_set_ = set_;
         shown_person_ = view.person;
-        pair_ = card_.first_pair(view, entry);
+        shown_way_ = view.answering;
+        pair_ = view.answering == Answering::hands ? hands_.first_pair(view, group)
+                                                   : card_.first_pair(view, entry);
+        together_.fresh();
+        fresh();
+    }
+
+    void fresh() {
         card_.fresh();
+        hands_.fresh();
     }
 
     void draw_nothing(Ui& ui, const RoomView& view, Actions& actions, Box area) const {
@@ -113,16 +131,43 @@ private:
         if (const auto index = drop_down(ui, "set", "Set to judge", names, chosen, box)) set_ = ids[*index];
     }
 
+    void draw_all(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, Box area,
+                  bool narrow) {
+        const SetResult& group = *group_entry(view.results, set_);
+        const float head = head_height(view, area.w);
+        if (head > 0) {
+            const bool before = everybody_;
+            draw_head(ui, view, actions, group, everybody_, area.take_top(head, 10));
+            if (everybody_ && !before) together_.fresh();
+            if (before != everybody_) fresh();
+        }
+        const bool nobody = view.sealed() && view.person.empty();
+        const bool open = view.answering == Answering::agreed && view.person.empty();
+        const bool together = (nobody && revealed_.contains(set_)) || (open && everybody_);
+        const bool hands = view.answering == Answering::hands;
+        // What is read across a room stands alone.
+        if (narrow || together || hands) {
+            draw_set_choice(ui, view, area.take_top(36, 10));
+        } else {
+            const Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
+            if (const auto set = draw_set_list(ui, view, set_, revealed_, list)) set_ = *set;
+        }
+        if (together && !entry.from_points) {
+            together_.draw(ui, view, actions, group, pair_, area);
+        } else if (nobody) {
+            draw_hand_over(ui, view, actions, group, revealed_, area);
+        } else if (entry.from_points) {
+            points_.draw(ui, view, actions, entry, area);
+        } else if (hands) {
+            hands_.draw(ui, view, actions, group, pair_, area);
+        } else {
+            draw_work(ui, view, actions, entry, area, narrow);
+        }
+    }
+
     void draw_work(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, Box area,
                    bool narrow) {
-        if (!narrow) {
-            const Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
-            if (const auto set = draw_set_list(ui, view, set_, list)) set_ = *set;
-        }
-        if (entry.from_points) {
-            points_.draw(ui, view, actions, entry, area);
-            return;
-        }
+        if (!view.sealed()) actions.examine(set_, view.person);
         const float card = narrow ? 352.0f : std::clamp(area.h * 0.57f, 350.0f, 500.0f);
         card_.draw(ui, view, actions, entry, pair_, area.take_top(card, 12));
         Box below = area;
@@ -142,16 +187,21 @@ private:
 
     void pick(const ItemPair& pair) {
         pair_ = pair;
-        card_.fresh();
+        card_.fresh(true);
     }
 
     PairCard card_;
+    TogetherCard together_;
+    HandsCard hands_;
     PairGrid grid_;
     HoldCard hold_;
     PointsCard points_;
     Id set_;
     Id shown_set_; ///< The set the pair belongs to, and who is asked.
     Id shown_person_;
+    Answering shown_way_ = Answering::agreed;
+    std::set<Id> revealed_;  ///< Sets opened while the others are sealed.
+    bool everybody_ = false; ///< Everybody's answers are shown.
     int last_frame_ = -2;
     ItemPair pair_;
 };

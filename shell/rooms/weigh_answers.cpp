@@ -3,6 +3,7 @@
 #include <algorithm>
 
 #include "core/decision/lookup.hpp"
+#include "shell/sealed_results.hpp"
 #include "shell/sentences.hpp"
 #include "shell/words.hpp"
 
@@ -41,21 +42,7 @@ SetResult own_entry(const RoomView& view, const Id& set) {
     const SetResult& shown = *shown_entry(view.results, set, view.person);
     if (shown.by == view.person) return shown;
     // He has answered nothing yet. What the group says is not his.
-    SetResult blank;
-    blank.set = set;
-    blank.by = view.person;
-    blank.from_points = shown.from_points;
-    blank.items = shown.items;
-    if (blank.from_points) return blank;
-    for (std::size_t i = 0; i < blank.items.size(); ++i) {
-        blank.parts.push_back({blank.items[i]});
-        for (std::size_t j = i + 1; j < blank.items.size(); ++j) {
-            const ItemPair pair{blank.items[i], blank.items[j]};
-            if (standing_judgment(view.decision, set, Id{}, pair[0], pair[1]) == nullptr)
-                blank.missing.push_back(pair);
-        }
-    }
-    return blank;
+    return unanswered_entry(shown, view.decision, view.person);
 }
 
 std::vector<ItemPair> asked_pairs(const Decision& decision, const SetResult& entry, const Id& by) {
@@ -78,6 +65,14 @@ std::vector<ItemPair> asked_pairs(const Decision& decision, const SetResult& ent
 
 Progress progress_of(const Decision& decision, const SetResult& entry, const Id& by) {
     Progress progress;
+    progress.points = entry.from_points;
+    if (progress.points) {
+        progress.shared_out =
+            std::any_of(decision.points.begin(), decision.points.end(), [&](const PointsEntry& points) {
+                return points.set == entry.set && (points.by.empty() || points.by == by || by.empty());
+            });
+        return progress;
+    }
     const auto asked = asked_pairs(decision, entry, by);
     progress.asked = asked.size();
     progress.ended = finished_by(decision, entry.set, by) != nullptr;
@@ -85,15 +80,15 @@ Progress progress_of(const Decision& decision, const SetResult& entry, const Id&
         const bool own = standing_judgment(decision, entry.set, by, pair[0], pair[1]) != nullptr;
         progress.any = progress.any || own;
         const bool agreed = standing_judgment(decision, entry.set, Id{}, pair[0], pair[1]) != nullptr;
-        const bool by_others =
-            by.empty() && std::none_of(entry.missing.begin(), entry.missing.end(),
-                                       [&](const ItemPair& missing) { return same_pair(missing, pair); });
+        const bool by_others = by.empty() && !holds(entry.missing, pair);
         if (!own && !agreed && !by_others) progress.left.push_back(pair);
     }
     return progress;
 }
 
 std::string progress_words(const Progress& progress) {
+    if (progress.points) return progress.shared_out ? "shared out" : "nothing yet";
+    if (progress.asked == 0) return "abstains";
     const std::string of_all = " of " + std::to_string(progress.asked) + " pairs";
     if (progress.left.empty()) return "all " + std::to_string(progress.asked) + " pairs";
     if (progress.ended) return "ended with " + std::to_string(progress.left.size()) + of_all + " unanswered";
@@ -101,20 +96,55 @@ std::string progress_words(const Progress& progress) {
     return std::to_string(progress.asked - progress.left.size()) + of_all;
 }
 
-std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Id& star,
-                                  const std::vector<ItemPair>& skipped, const std::optional<ItemPair>& from) {
-    const Progress progress = progress_of(view.decision, entry, view.person);
+std::vector<std::string> not_done(const RoomView& view, const Id& set) {
+    std::vector<std::string> names;
+    for (const auto& person : view.decision.people) {
+        if (person.share == 0) continue;
+        const bool done =
+            std::all_of(view.results.sets.begin(), view.results.sets.end(), [&](const SetResult& entry) {
+                if (!entry.by.empty() || (!set.empty() && entry.set != set)) return true;
+                return progress_of(view.decision, entry, person.id).done();
+            });
+        if (!done) names.push_back(person_name(view.decision, person.id));
+    }
+    return names;
+}
+
+std::vector<Id> judges_of(const Decision& decision, const SetResult& entry, const ItemPair& pair) {
+    std::vector<Id> judges;
+    for (const auto& person : decision.people) {
+        if (holds(asked_pairs(decision, entry, person.id), pair)) judges.push_back(person.id);
+    }
+    return judges;
+}
+
+std::vector<ItemPair> left_for_hands(const Decision& decision, const SetResult& entry) {
+    std::vector<ItemPair> left;
+    for (const auto& pair : asked_pairs(decision, entry, Id{})) {
+        if (standing_judgment(decision, entry.set, Id{}, pair[0], pair[1]) != nullptr) continue;
+        const auto judges = judges_of(decision, entry, pair);
+        if (std::any_of(judges.begin(), judges.end(), [&](const Id& by) {
+                return standing_judgment(decision, entry.set, by, pair[0], pair[1]) == nullptr;
+            }))
+            left.push_back(pair);
+    }
+    return left;
+}
+
+std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Asking& asking,
+                                  const std::optional<ItemPair>& from) {
     const auto wanted = [&](const ItemPair& pair) {
-        return !holds(skipped, pair) && !(from && same_pair(*from, pair));
+        return !holds(asking.skipped, pair) && !(from && same_pair(*from, pair));
     };
-    for (const auto& pair : progress.left) {
-        if (!star.empty() && (pair[0] == star || pair[1] == star) && wanted(pair)) return pair;
+    for (const auto& pair : asking.left) {
+        if (!asking.star.empty() && (pair[0] == asking.star || pair[1] == asking.star) && wanted(pair))
+            return pair;
     }
     bool passed = !from;
     std::optional<ItemPair> earlier;
-    for (const auto& pair : asked_pairs(view.decision, entry, view.person)) {
+    for (const auto& pair : asked_pairs(view.decision, entry, asking.by)) {
         if (from && same_pair(*from, pair)) passed = true;
-        if (!wanted(pair) || !holds(progress.left, pair)) continue;
+        if (!wanted(pair) || !holds(asking.left, pair)) continue;
         if (passed) return pair;
         if (!earlier) earlier = pair;
     }
@@ -169,7 +199,7 @@ bool ranges_changed(const RoomView& view, const SetResult& entry) {
     std::vector<Id> who{Id{}};
     if (!view.person.empty()) {
         who.push_back(view.person);
-    } else if (!sealed(view)) {
+    } else if (!view.sealed()) {
         for (const auto& person : view.decision.people) who.push_back(person.id);
     }
     for (const auto& pair : asked_pairs(view.decision, entry, Id{})) {

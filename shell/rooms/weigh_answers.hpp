@@ -15,11 +15,6 @@ namespace steelyard {
 const Judgment* standing_judgment(const Decision& decision, const Id& set, const Id& by, const Id& a,
                                   const Id& b);
 
-/// True where nobody but the one who answers may be seen.
-inline bool sealed(const RoomView& view) {
-    return view.answering == Answering::alone;
-}
-
 /// The entry of a set that the one who answers may see: the group's where nobody does, else his own, and an
 /// empty one where he has not answered yet.
 SetResult own_entry(const RoomView& view, const Id& set);
@@ -33,18 +28,37 @@ struct Progress {
     std::vector<ItemPair> left; ///< Neither answered by him nor agreed in the room.
     bool ended = false;         ///< He said that it is enough.
     bool any = false;           ///< He has answered something himself.
+    bool points = false;        ///< A set of points, which is answered as a whole.
+    bool shared_out = false;
 
-    bool done() const { return left.empty() || ended; }
+    bool done() const { return points ? shared_out : left.empty() || ended; }
 };
 Progress progress_of(const Decision& decision, const SetResult& entry, const Id& by);
 
 /// "9 of 15 pairs", "all 15 pairs", "ended with 4 of 15 pairs unanswered", "nothing yet".
 std::string progress_words(const Progress& progress);
 
-/// The pair to ask next; none where nothing is left but what was skipped for now. With a star first the item
-/// named as mattering most against each other one. `from` is the pair shown now, if there is one.
-std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Id& star,
-                                  const std::vector<ItemPair>& skipped, const std::optional<ItemPair>& from);
+/// The names of those whose answers count and who have not done with a set; with all sets where it is empty.
+std::vector<std::string> not_done(const RoomView& view, const Id& set);
+
+/// The judges of a pair in a show of hands: all people but those who abstain from one of the options.
+std::vector<Id> judges_of(const Decision& decision, const SetResult& entry, const ItemPair& pair);
+
+/// The pairs that nothing is agreed on and that a judge has not answered.
+std::vector<ItemPair> left_for_hands(const Decision& decision, const SetResult& entry);
+
+/// What is asked of whom.
+struct Asking {
+    Id by;                         ///< Empty: the room.
+    std::vector<ItemPair> left;    ///< What can be asked.
+    Id star;                       ///< Named as mattering most, or empty.
+    std::vector<ItemPair> skipped; ///< For now.
+};
+
+/// The pair to ask next; none where nothing is left but what was skipped. With a star first the item named as
+/// mattering most against each other one. `from` is the pair shown now, if there is one.
+std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Asking& asking,
+                                  const std::optional<ItemPair>& from);
 
 /// "2 more answers give weights; 5 more would firm them up." Empty where nothing is left.
 std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress);

@@ -38,9 +38,10 @@ std::string keys_text(float width) {
 
 } // namespace
 
-void PairCard::fresh() {
+void PairCard::fresh(bool bring_in) {
     fresh_ = true;
     memory_ = {};
+    memory_.bring_in = bring_in;
     remark_open_ = false;
 }
 
@@ -53,24 +54,37 @@ Id PairCard::star(const RoomView& view, const Id& set) const {
     return found == stars_.end() ? Id{} : found->second;
 }
 
-ItemPair PairCard::first_pair(const RoomView& view, const SetResult& entry) const {
+Asking PairCard::asking(const RoomView& view, const SetResult& entry) const {
+    Asking asking{
+        view.person, progress_of(view.decision, entry, view.person).left, star(view, entry.set), {}};
+    if (asking.left.empty() && view.person.empty()) {
+        // All is answered by somebody: what the room has not agreed on can still be settled.
+        for (const auto& pair : asked_pairs(view.decision, entry, Id{})) {
+            if (standing_judgment(view.decision, entry.set, Id{}, pair[0], pair[1]) == nullptr)
+                asking.left.push_back(pair);
+        }
+    }
     const auto skipped = skipped_.find({entry.set, view.person});
-    const auto next = next_pair(view, entry, star(view, entry.set),
-                                skipped == skipped_.end() ? std::vector<ItemPair>{} : skipped->second, {});
+    if (skipped != skipped_.end()) asking.skipped = skipped->second;
+    return asking;
+}
+
+ItemPair PairCard::first_pair(const RoomView& view, const SetResult& entry) const {
+    const auto next = next_pair(view, entry, asking(view, entry), {});
     return next.value_or(ItemPair{entry.items[0], entry.items[1]});
 }
 
 void PairCard::move_on(const RoomView& view, const SetResult& entry, ItemPair& pair, bool skip) {
     auto& skipped = skipped_[{entry.set, view.person}];
     if (skip) skipped.push_back(pair);
-    auto next = next_pair(view, entry, star(view, entry.set), skipped, pair);
+    auto next = next_pair(view, entry, asking(view, entry), pair);
     if (!next) {
         // Only skipped ones are left: they come round again.
         skipped.clear();
-        next = next_pair(view, entry, star(view, entry.set), skipped, pair);
+        next = next_pair(view, entry, asking(view, entry), pair);
     }
     if (next) pair = *next;
-    fresh();
+    fresh(true);
 }
 
 ArmState PairCard::arm_state(const RoomView& view, const SetResult& entry, const ItemPair& pair) const {
@@ -211,6 +225,21 @@ void PairCard::draw_controls(Ui& ui, const RoomView& view, Actions& actions, con
     if (button(ui, "next", "Next", next)) move_on(view, entry, pair, false);
 }
 
+void PairCard::draw_go_on(Ui& ui, const RoomView& view, Actions& actions, Box& row) {
+    if (view.sealed() && !view.person.empty()) {
+        const Box over = row.take_right(button_width("Hand over"), 8);
+        if (button(ui, "done-hand-over", "Hand over", over)) actions.answer_as({});
+    }
+    const auto open =
+        std::find_if(view.results.sets.begin(), view.results.sets.end(), [&](const SetResult& s) {
+            return s.by.empty() && s.set != set_ && !progress_of(view.decision, s, view.person).done();
+        });
+    if (open == view.results.sets.end()) return;
+    const std::string label = "Go on to " + node_name(view.decision, open->set);
+    const Box go = row.take_right(std::min(button_width(label), row.w * 0.55f), 8);
+    if (button(ui, "go-on", label, go)) actions.go(RoomId::weigh, open->set);
+}
+
 void PairCard::draw_progress(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry,
                              ItemPair& pair, Box row) {
     const Theme& theme = ui.look();
@@ -221,16 +250,20 @@ void PairCard::draw_progress(Ui& ui, const RoomView& view, Actions& actions, con
     ImU32 ink = theme.quiet;
     const float line = font_size(Font::small);
     if (progress.left.empty()) {
-        text = "All " + std::to_string(progress.asked) + " pairs of this set are answered.";
+        text = progress.asked == 0
+                   ? "You abstain from every pair of this set."
+                   : "All " + std::to_string(progress.asked) + " pairs of this set are answered.";
         ink = theme.green;
+        draw_go_on(ui, view, actions, row);
     } else if (progress.ended) {
         text = "Ended with " + std::to_string(progress.left.size()) + " of " +
                std::to_string(progress.asked) + " pairs unanswered.";
         const Box reopen = row.take_right(button_width("Reopen"), 10);
         if (button(ui, "reopen", "Reopen", reopen, ButtonKind::quiet, !view.read_only))
             actions.edit(ReopenSet{set_, view.person});
+        draw_go_on(ui, view, actions, row);
     } else {
-        const std::string enough = sealed(view) ? std::string() : enough_sentence(view, entry);
+        const std::string enough = view.sealed() ? std::string() : enough_sentence(view, entry);
         text = enough.empty() ? needed_sentence(d, entry, progress) : enough;
         const std::string finish = mine ? "Enough for me" : "That is all";
         const Box end = row.take_right(button_width(finish), 8);
@@ -242,7 +275,7 @@ void PairCard::draw_progress(Ui& ui, const RoomView& view, Actions& actions, con
             actions.edit(Enter<Finished>{std::move(finished)});
         }
     }
-    if (!progress.left.empty() && row.w > 330) {
+    if (!progress.done() && row.w > 330) {
         std::vector<std::string> names{"Which matters most?"};
         std::size_t chosen = 0;
         for (const auto& item : entry.items) {

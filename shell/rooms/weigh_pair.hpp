@@ -7,7 +7,7 @@
 #include <vector>
 
 #include "shell/rooms/room.hpp"
-#include "shell/rooms/weigh_model.hpp"
+#include "shell/rooms/weigh_answers.hpp"
 #include "shell/widgets/arm.hpp"
 
 namespace steelyard {
@@ -19,8 +19,8 @@ public:
     void draw(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, ItemPair& pair,
               Box box);
 
-    /// Another pair was chosen: the arm takes the keyboard.
-    void fresh();
+    /// Another pair is shown: the arm takes the keyboard, and with `bring_in` is scrolled into sight.
+    void fresh(bool bring_in = false);
 
     /// The pair to begin a set with.
     ItemPair first_pair(const RoomView& view, const SetResult& entry) const;
@@ -36,8 +36,10 @@ private:
     void draw_remark(Ui& ui, const RoomView& view, Actions& actions, const Judgment* own, Box& row);
     void draw_progress(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, ItemPair& pair,
                        Box row);
+    void draw_go_on(Ui& ui, const RoomView& view, Actions& actions, Box& row);
     ArmState arm_state(const RoomView& view, const SetResult& entry, const ItemPair& pair) const;
     void move_on(const RoomView& view, const SetResult& entry, ItemPair& pair, bool skip);
+    Asking asking(const RoomView& view, const SetResult& entry) const;
     Id star(const RoomView& view, const Id& set) const;
 
     Id set_; ///< Drawn now.

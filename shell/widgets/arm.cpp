@@ -192,6 +192,61 @@ void draw_other(Ui& ui, const ArmState& state, const std::optional<double>& show
               {.font = Font::small, .ink = ui.look().brass_ink, .align = Align::centre});
 }
 
+/// Where the beam leans to: the poise, or with several judges and none agreed their mean.
+double tilt_of(const ArmState& state, const std::optional<double>& shown) {
+    if (shown) return position_of(*shown);
+    return !state.named.empty() && state.other ? position_of(*state.other) : 0.0;
+}
+
+/// The poise with its number, or an empty one that says why.
+void draw_own(Ui& ui, const ArmState& state, const std::optional<double>& shown, bool off,
+              const arm::Layout& layout, const Beam& beam) {
+    const std::string number =
+        shown ? "\xC3\x97" + ratio_text(*shown >= 1 ? *shown : 1 / *shown) : std::string();
+    if (state.other) draw_other(ui, state, shown, layout, beam, number);
+    const double position = shown ? position_of(*shown) : 0;
+    const ImVec2 top = beam.at(position, beam.poise_height() + 4);
+    if (shown) {
+        arm::draw_poise(ui, beam, position, arm::PoiseLook::own);
+        draw_text(ui, {top.x, top.y - font_size(layout.load)}, number,
+                  {.font = layout.load, .align = Align::centre});
+    } else if (!state.other && !off) {
+        arm::draw_poise(ui, beam, 0, arm::PoiseLook::empty);
+        draw_text(ui, {top.x, top.y - font_size(Font::small)}, "not judged",
+                  {.font = Font::small, .ink = ui.look().brass_ink, .align = Align::centre});
+    }
+}
+
+/// Two colours, as around every control.
+void draw_ring(const Ui& ui, const Beam& beam, double position) {
+    ImDrawList* list = ImGui::GetWindowDrawList();
+    const ImVec2 middle = beam.at(position, beam.poise_height() / 2 + 2);
+    const float tall = beam.poise_height() / 2 + 1;
+    const float wide = 22 * beam.scale;
+    list->AddRect({middle.x - wide, middle.y - tall}, {middle.x + wide, middle.y + tall}, ui.look().focus, 8,
+                  0, 2);
+    list->AddRect({middle.x - wide + 2, middle.y - tall + 2}, {middle.x + wide - 2, middle.y + tall - 2},
+                  ui.look().card, 6, 0, 2);
+}
+
+/// Everything there is to see; gives the beam as it leans. `off`: the poise is in the hand.
+Beam picture(Ui& ui, const ArmState& state, const std::optional<double>& shown, bool right_side, bool off,
+             const Box& box) {
+    const arm::Layout layout = arm::lay_out(state, shown, box);
+    const Beam beam = arm::beam_at(layout, tilt_of(state, shown));
+    arm::draw_stand(ui, layout, beam);
+    arm::draw_beam(ui, layout, beam);
+    for (const bool right : {false, true})
+        arm::draw_load(ui, right ? state.right : state.left, layout, beam, right, right_side && right);
+    if (state.named.empty()) {
+        draw_own(ui, state, shown, off, layout, beam);
+        return beam;
+    }
+    if (state.other && !shown) arm::draw_poise(ui, beam, position_of(*state.other), arm::PoiseLook::empty);
+    arm::draw_named(ui, state, shown, layout, beam);
+    return beam;
+}
+
 } // namespace
 
 double stepped_ratio(double ratio, int steps, bool fine) {
@@ -203,16 +258,15 @@ double stepped_ratio(double ratio, int steps, bool fine) {
     return step >= 0 ? 1 + step : 1 / (1 - step);
 }
 
+void show_arm(Ui& ui, const ArmState& state, bool right_side, const Box& box) {
+    picture(ui, state, state.ratio, right_side, false, box);
+}
+
 ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const ArmState& state,
                    ArmMemory& memory, const Box& box) {
-    const Theme& theme = ui.look();
     ArmAnswer answer;
-    const auto tilt_of = [&](const std::optional<double>& ratio) {
-        if (ratio) return position_of(*ratio);
-        return !state.named.empty() && state.other ? position_of(*state.other) : 0.0;
-    };
     const arm::Layout before = arm::lay_out(state, state.ratio, box);
-    const Beam stood = arm::beam_at(before, tilt_of(state.ratio));
+    const Beam stood = arm::beam_at(before, tilt_of(state, state.ratio));
 
     // The loads come first: what is drawn first has the pointer.
     for (const bool right : {false, true})
@@ -225,7 +279,8 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
         // At once: a request for the next frame is dropped where what has the focus now is drawn after this,
         // in a scrolled area.
         ImGui::SetFocusID(ImGui::GetItemID(), ImGui::GetCurrentWindow());
-        ImGui::ScrollToItem(ImGuiScrollFlags_KeepVisibleEdgeY);
+        if (memory.bring_in) ImGui::ScrollToItem(ImGuiScrollFlags_KeepVisibleEdgeY);
+        memory.bring_in = false;
         ui.focus_next.clear();
     }
     const Hand hand{ImGui::IsItemActive(), ImGui::IsItemDeactivated()};
@@ -234,55 +289,19 @@ ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const Ar
     ImGui::EndDisabled();
     ImGui::PopID();
     read_hand(hand, state, memory, before, stood, answer);
+    if (answer.take_back) memory = {};
 
     std::optional<double> shown = answer.preview ? answer.preview : answer.ratio ? answer.ratio : state.ratio;
     if (answer.off || answer.take_back) shown.reset();
-    const arm::Layout layout = arm::lay_out(state, shown, box);
-    const double position = shown ? position_of(*shown) : 0;
-    const Beam beam = arm::beam_at(layout, tilt_of(shown));
-    arm::draw_stand(ui, layout, beam);
-    arm::draw_beam(ui, layout, beam);
-    for (const bool right : {false, true}) {
-        const bool fresh = !state.ratio || *state.ratio == 1;
-        arm::draw_load(ui, right ? state.right : state.left, layout, beam, right,
-                       fresh && memory.right_side && right);
-    }
-    const ImVec2 at = beam.at(position, beam.thickness(position));
-    if (!state.named.empty()) {
-        if (state.other && !shown)
-            arm::draw_poise(ui, beam, position_of(*state.other), arm::PoiseLook::empty);
-        arm::draw_named(ui, state, shown, layout, beam);
-    } else {
-        const std::string number =
-            shown ? "\xC3\x97" + ratio_text(*shown >= 1 ? *shown : 1 / *shown) : std::string();
-        if (state.other) draw_other(ui, state, shown, layout, beam, number);
-        const ImVec2 top = beam.at(position, beam.poise_height() + 4);
-        if (shown) {
-            arm::draw_poise(ui, beam, position, arm::PoiseLook::own);
-            draw_text(ui, {top.x, top.y - font_size(layout.load)}, number,
-                      {.font = layout.load, .align = Align::centre});
-        } else if (!state.other && !answer.off) {
-            arm::draw_poise(ui, beam, 0, arm::PoiseLook::empty);
-            draw_text(ui, {top.x, top.y - font_size(Font::small)}, "not judged",
-                      {.font = Font::small, .ink = theme.brass_ink, .align = Align::centre});
-        }
-    }
+    const bool fresh = !state.ratio || *state.ratio == 1;
+    const Beam beam = picture(ui, state, shown, fresh && memory.right_side, answer.off, box);
     if (answer.off) {
         const ImVec2 mouse = ImGui::GetIO().MousePos;
         arm::draw_loose_poise(ui, {mouse.x, mouse.y + 16});
     }
-    if (focused && ui.keyboard_used && !answer.off && shown) {
-        // Two colours, as around every control.
-        ImDrawList* list = ImGui::GetWindowDrawList();
-        const ImVec2 middle = beam.at(position, beam.poise_height() / 2 + 2);
-        const float tall = beam.poise_height() / 2 + 1;
-        const float wide = 22 * beam.scale;
-        list->AddRect({middle.x - wide, middle.y - tall}, {middle.x + wide, middle.y + tall}, theme.focus, 8,
-                      0, 2);
-        list->AddRect({middle.x - wide + 2, middle.y - tall + 2}, {middle.x + wide - 2, middle.y + tall - 2},
-                      theme.card, 6, 0, 2);
-    }
-    report(ui, id, label, state, shown, box, at, focused);
+    if (focused && ui.keyboard_used && !answer.off && shown) draw_ring(ui, beam, position_of(*shown));
+    const double position = shown ? position_of(*shown) : 0;
+    report(ui, id, label, state, shown, box, beam.at(position, beam.thickness(position)), focused);
     return answer;
 }
 

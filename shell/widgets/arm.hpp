@@ -30,6 +30,7 @@ struct ArmState {
     std::optional<double> other;   ///< An empty poise: what the other answers say, or a mean of several.
     std::string other_name;        ///< What the empty poise is: "the other answers".
     std::vector<NamedPoise> named; ///< Small poises with their names, for several judges on one arm.
+    std::string own_name;          ///< Beside named ones: what the poise a hand can take is, "agreed".
     bool enabled = true;
 };
 
@@ -39,6 +40,7 @@ struct ArmMemory {
     bool right_side = false; ///< X was pressed before a digit: the next one counts for the right load.
     std::string typed;       ///< "2." or "1/": a number being typed on, shown by the caller.
     bool grabbed = false;    ///< A press began on the beam.
+    bool bring_in = false;   ///< Scroll the arm into sight when it takes the keyboard.
 };
 
 struct ArmAnswer {
@@ -61,6 +63,9 @@ struct ArmAnswer {
 /// poise is called.
 ArmAnswer draw_arm(Ui& ui, std::string_view id, std::string_view label, const ArmState& state,
                    ArmMemory& memory, const Box& box);
+
+/// The same without a hand or keys: a picture. `right_side`: the load digits count for elsewhere.
+void show_arm(Ui& ui, const ArmState& state, bool right_side, const Box& box);
 
 /// The next notch from a ratio towards the left load (`steps` > 0) or the right one; a tenth of a step with
 /// `fine`.

@@ -194,7 +194,9 @@ Layout lay_out(const ArmState& state, const std::optional<double>& shown, const 
             layout.flags.push_back(named.name + " \xC3\x97" + ratio_text(times));
         }
         layout.own_flag = shown.has_value();
-        if (shown) layout.flags.push_back("agreed \xC3\x97" + ratio_text(*shown >= 1 ? *shown : 1 / *shown));
+        if (shown)
+            layout.flags.push_back(state.own_name + " \xC3\x97" +
+                                   ratio_text(*shown >= 1 ? *shown : 1 / *shown));
         Beam beam;
         beam.pivot = {box.x + box.w / 2, 0};
         beam.half = layout.half;

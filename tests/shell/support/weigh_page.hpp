@@ -16,7 +16,7 @@ class WeighPage : public Headless {
 public:
     explicit WeighPage(const Decision& decision, HeadlessOptions options = {});
 
-    /// What the store holds last: the decision as a person would find it again.
+    /// The decision as a person would find it again.
     Decision decision();
 
     /// The ratio that stands in the goal's set, 0 where there is none.
@@ -32,7 +32,7 @@ public:
     void fill(const std::string& field, const std::string& text);
 
 private:
-    std::string id_;
+    Decision opened_;
 };
 
 } // namespace steelyard::testing

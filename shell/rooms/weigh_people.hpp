@@ -1,0 +1,23 @@
+#pragma once
+
+#include <set>
+
+#include "shell/rooms/weigh_answers.hpp"
+
+/// Who answers how, in the head of the room, and the card that hands over from one judge to the next.
+namespace steelyard {
+
+/// Height the head takes in so much width; 0 where nobody is named who could answer for himself.
+float head_height(const RoomView& view, float width);
+
+/// The way of answering, and who answers. `together` says whether the answers of all are shown, and is
+/// changed by its button.
+void draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
+               Box box);
+
+/// Sealed, with nobody at the seat: who has answered what, whom to hand over to, and revealing a set. Adds to
+/// `revealed`.
+void draw_hand_over(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group,
+                    std::set<Id>& revealed, Box box);
+
+} // namespace steelyard
