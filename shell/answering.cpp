@@ -23,7 +23,9 @@ Box card_box(const Box& area, float width, float height) {
 /// Buttons from the left, each below the one before where the width does not suffice.
 class Buttons {
 public:
-    Buttons(Ui& ui, const Box& space) : ui_(ui), space_(space), x_(space.x), y_(space.y) {}
+    /// `indent`: how far right the first one begins.
+    Buttons(Ui& ui, const Box& space, float indent = 0)
+        : ui_(ui), space_(space), x_(space.x + indent), y_(space.y) {}
 
     bool add(std::string_view id, std::string_view label, ButtonKind kind) {
         const float width = std::min(button_width(label, kind), space_.w);
@@ -51,7 +53,7 @@ void draw_begin_card(App::State& state, const RoomView& view, Box area) {
     const Theme& theme = ui.look();
     const Person& person = *find_person(view.decision, state.handing_to);
     const std::string name = person_name(view.decision, person.id);
-    const Box box = card_box(area, 680, 330);
+    const Box box = card_box(area, 680, 290);
     const Card card(ui, box, theme.brass);
     ScrollArea scroll(ui, "begin-card", box.inset(22));
     Box inside = scroll.inner();
@@ -66,12 +68,11 @@ void draw_begin_card(App::State& state, const RoomView& view, Box area) {
         y += 26;
     }
     y += 10;
-    y += draw_paragraph(ui, {inside.x, y}, inside.w,
-                        "Until the answers are opened, nobody else sees yours and you see nobody else's. The "
-                        "standing stays folded away.");
-    y += 16;
-    Buttons buttons(ui, {inside.x, y, inside.w, 0});
-    if (buttons.add("begin", "I am " + name + ": begin", ButtonKind::strong)) {
+    const std::string begin = "I am " + name + ": begin";
+    float wide = button_width(begin) + 12 + button_width("Back", ButtonKind::quiet);
+    if (!view.sealed()) wide += button_width("Answer in the open") + 12;
+    Buttons buttons(ui, {inside.x, y, inside.w, 0}, std::max(0.0f, (inside.w - wide) / 2));
+    if (buttons.add("begin", begin, ButtonKind::strong)) {
         const Id next = person.id;
         state.after_frame.emplace_back([&state, next] {
             state.change_answering(Answering::alone);
@@ -91,7 +92,11 @@ void draw_begin_card(App::State& state, const RoomView& view, Box area) {
             state.fresh_frames = 2;
         });
     }
-    scroll.reach(buttons.bottom() + 4);
+    y = buttons.bottom() + 16;
+    y += draw_paragraph(ui, {inside.x, y}, inside.w,
+                        "Until the answers are opened, nobody else sees yours and you see nobody else's. The "
+                        "standing stays folded away.");
+    scroll.reach(y + 4);
 }
 
 void draw_opening_card(App::State& state, const RoomView& view, Box area) {
@@ -152,7 +157,7 @@ void draw_sealed_bar(App::State& state, Actions& actions, Box box) {
     const OnPaper paper(ui, theme.brass_wash);
     Box row = box;
     row.take_right(12);
-    const std::string label = box.w > 700 ? "Open what is sealed" : "Open";
+    const std::string label = "Open what is sealed";
     const Box open = row.take_right(button_width(label, ButtonKind::quiet), 10);
     const std::string text = box.w > 900
                                  ? "Each answers alone: the standing and the others' answers are folded away."

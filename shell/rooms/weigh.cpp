@@ -34,7 +34,7 @@ public:
 
         // Short or narrow pages scroll as a whole; the list of sets becomes one to drop down.
         const bool narrow = area.w < 700;
-        const float head = head_height(view, area.w);
+        const float head = head_height(view, set_, area.w);
         const float least = narrow ? 880.0f + head : 552.0f + (head > 0 ? head + 10 : 0);
         if (narrow || area.h < least) {
             ScrollArea scroll(ui, "weigh", area);
@@ -134,10 +134,11 @@ private:
     void draw_all(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, Box area,
                   bool narrow) {
         const SetResult& group = *group_entry(view.results, set_);
-        const float head = head_height(view, area.w);
+        const float head = head_height(view, set_, area.w);
+        Box free{area.x, area.y, 0, 0};
         if (head > 0) {
             const bool before = everybody_;
-            draw_head(ui, view, actions, group, everybody_, area.take_top(head, 10));
+            free = draw_head(ui, view, actions, group, everybody_, area.take_top(head, 10));
             if (everybody_ && !before) together_.fresh();
             if (before != everybody_) fresh();
         }
@@ -146,7 +147,9 @@ private:
         const bool together = (nobody && revealed_.contains(set_)) || (open && everybody_);
         const bool hands = view.answering == Answering::hands;
         // What is read across a room stands alone.
-        if (narrow || together || hands) {
+        if (!narrow && (together || hands) && free.w >= 150) {
+            draw_set_choice(ui, view, {free.x, free.y + 2, std::min(free.w, 320.0f), 34});
+        } else if (narrow || together || hands) {
             draw_set_choice(ui, view, area.take_top(36, 10));
         } else {
             const Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);

@@ -158,9 +158,8 @@ void HandsCard::draw_words(Ui& ui, const RoomView& view, const Turn& turn, Box& 
         return;
     }
     const auto said = said_by_each(view, set_, turn.pair);
-    for (const auto& line : apart_lines(view, set_, turn.pair, said))
-        inside.take_top(
-            draw_sentence(ui, inside, line, inside.h > 380 ? Font::large : Font::heading, Font::heading, 2));
+    inside.take_top(draw_sentences(ui, inside, apart_lines(view, set_, turn.pair, said),
+                                   inside.h > 340 ? Font::large : Font::heading, Font::heading));
     inside.take_top(6);
 }
 
@@ -208,7 +207,7 @@ void HandsCard::draw_judges(Ui& ui, const RoomView& view, const Turn& turn, Box 
 }
 
 void HandsCard::draw_buttons(Ui& ui, const RoomView& view, Actions& actions, const Turn& turn, ItemPair& pair,
-                             Box box) {
+                             Box& inside) {
     const bool asked = !turn.through(at_) && !view.read_only;
     std::vector<Key> keys;
     for (int k = 1; k <= scale_end; ++k)
@@ -222,9 +221,11 @@ void HandsCard::draw_buttons(Ui& ui, const RoomView& view, Actions& actions, con
     named("back", "Back", ButtonKind::quiet, at_ > 0);
     named("skip", "Skip", ButtonKind::quiet, true);
     named("next", "Next pair", turn.through(at_) ? ButtonKind::strong : ButtonKind::plain, true);
-    const auto places = flow(keys, box);
+    auto places = flow(keys, {inside.x, 0, inside.w, 0});
+    const Box box = inside.take_bottom(places.back().bottom(), 8);
     for (std::size_t i = 0; i < keys.size(); ++i) {
         const Key& key = keys[i];
+        places[i].y += box.y;
         if (!button(ui, key.id, key.label, places[i], key.kind, key.enabled)) continue;
         focus_ = true;
         if (i < scale_end) digit(view, actions, turn, static_cast<int>(i) + 1);
@@ -251,9 +252,9 @@ void HandsCard::draw(Ui& ui, const RoomView& view, Actions& actions, const SetRe
     const ItemPair shown = pair;
     draw_words(ui, view, turn, inside);
     const bool narrow = inside.w < 640;
-    Box buttons = inside.take_bottom(inside.w >= 900 ? key_height : 2 * key_height + key_gap, 8);
-    Box judges = narrow ? inside.take_bottom(170, 8)
-                        : inside.take_right(std::clamp(inside.w * 0.3f, 220.0f, 340.0f), 18);
+    draw_buttons(ui, view, actions, turn, pair, inside);
+    const Box judges = narrow ? inside.take_bottom(170, 8)
+                              : inside.take_right(std::clamp(inside.w * 0.3f, 220.0f, 340.0f), 18);
 
     // The keys' place, under the arm.
     ImGui::SetCursorScreenPos(inside.at());
@@ -287,7 +288,6 @@ void HandsCard::draw(Ui& ui, const RoomView& view, Actions& actions, const SetRe
     state.other = group_ratio(group, shown[0], shown[1]);
     show_arm(ui, state, other_side_, inside);
     draw_judges(ui, view, turn, judges);
-    draw_buttons(ui, view, actions, turn, pair, buttons);
 }
 
 } // namespace steelyard

@@ -40,7 +40,7 @@ private:
     void draw_words(Ui& ui, const RoomView& view, const Turn& turn, Box& inside);
     void draw_judges(Ui& ui, const RoomView& view, const Turn& turn, Box box);
     void draw_buttons(Ui& ui, const RoomView& view, Actions& actions, const Turn& turn, ItemPair& pair,
-                      Box box);
+                      Box& inside);
 
     Id set_; ///< Drawn now.
     std::size_t at_ =

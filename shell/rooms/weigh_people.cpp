@@ -14,16 +14,18 @@ namespace {
 
 constexpr float row_height = 38;
 constexpr float row_gap = 10;
-constexpr float one_row_from = 720;
-
-bool two_rows(const RoomView& view, float width) {
-    return width < one_row_from && (view.answering == Answering::alone || !view.person.empty());
-}
+constexpr float one_row_from = 760;
 
 /// Whether somebody has answered something of the set for himself.
 bool anybody(const RoomView& view, const Id& set) {
     return std::any_of(view.decision.judgments.begin(), view.decision.judgments.end(),
                        [&](const Judgment& judgment) { return judgment.set == set && !judgment.by.empty(); });
+}
+
+bool two_rows(const RoomView& view, const Id& set, float width) {
+    const bool more =
+        view.sealed() || !view.person.empty() || (view.answering == Answering::agreed && anybody(view, set));
+    return width < one_row_from && more;
 }
 
 /// Who is at the seat, in large letters, and the way to the next one.
@@ -52,18 +54,18 @@ void draw_seat(Ui& ui, const RoomView& view, Actions& actions, Box box) {
 
 } // namespace
 
-float head_height(const RoomView& view, float width) {
+float head_height(const RoomView& view, const Id& set, float width) {
     if (view.decision.people.empty()) return 0;
-    return two_rows(view, width) ? 2 * row_height + row_gap : row_height;
+    return two_rows(view, set, width) ? 2 * row_height + row_gap : row_height;
 }
 
-void draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
-               Box box) {
-    if (view.decision.people.empty()) return;
+Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
+              Box box) {
+    if (view.decision.people.empty()) return {box.x, box.y, 0, 0};
     Box first = box.take_top(row_height, row_gap);
-    const bool stacked = two_rows(view, first.w);
-    const float wanted = first.w < one_row_from && !stacked ? first.w - 160 : 400.0f;
-    const Box ways = first.take_left(stacked ? first.w : std::clamp(wanted, 300.0f, 400.0f), 16);
+    const bool stacked = two_rows(view, group.set, first.w);
+    const float wanted = first.w < one_row_from && !stacked ? first.w - 160 : 462.0f;
+    const Box ways = first.take_left(stacked ? first.w : std::clamp(wanted, 300.0f, 462.0f), 16);
     // In the open as a person is none of the three.
     const bool open_person = view.answering == Answering::agreed && !view.person.empty();
     const std::size_t chosen = open_person ? 3 : static_cast<std::size_t>(view.answering);
@@ -76,15 +78,16 @@ void draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& 
         else
             actions.answer_by(next);
     }
-    const Box seat = stacked ? box : first;
+    Box seat = stacked ? box : first;
     if (!view.person.empty()) {
         draw_seat(ui, view, actions, seat);
     } else if (view.answering == Answering::agreed && anybody(view, group.set) && seat.w > 120) {
         const std::string label = together ? "Back to the arm" : "Everybody's answers";
-        const float width = std::min(button_width(label), seat.w);
-        if (button(ui, "together", label, {seat.right() - width, seat.y + 2, width, 34}, ButtonKind::plain))
+        const Box toggle = seat.take_right(std::min(button_width(label), seat.w), 14);
+        if (button(ui, "together", label, {toggle.x, toggle.y + 2, toggle.w, 34}, ButtonKind::plain))
             together = !together;
     }
+    return stacked ? Box{first.x, first.y, 0, 0} : seat;
 }
 
 void draw_hand_over(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group,
@@ -97,6 +100,7 @@ void draw_hand_over(Ui& ui, const RoomView& view, Actions& actions, const SetRes
     const Box in = area.inner();
     float y = in.y;
     y += draw_paragraph(ui, {in.x, y}, in.w, "Who answers next?", {.font = Font::heading}) + 8;
+    bool suggested = false; // One of them stands out: the next who has something to answer.
     for (const auto& person : d.people) {
         const std::string name = person_name(d, person.id);
         const Progress here = progress_of(d, group, person.id);
@@ -110,8 +114,9 @@ void draw_hand_over(Ui& ui, const RoomView& view, Actions& actions, const SetRes
         const std::string label = "Hand over to " + name;
         const float width = std::min(button_width(label), in.w * 0.48f);
         if (button(ui, "seat/" + person.id, label, {in.right() - width - 4, y + 3, width, 36},
-                   here.done() ? ButtonKind::plain : ButtonKind::strong, !view.read_only))
+                   here.done() || suggested ? ButtonKind::plain : ButtonKind::strong, !view.read_only))
             actions.answer_as(person.id);
+        suggested = suggested || !here.done();
         const float space = in.w - width - 24;
         draw_text(ui, {in.x, y + 2}, name, {.font = Font::strong, .max_width = space});
         std::string words = (here.done() && !here.ended ? "done with this set: " : "") +

@@ -8,12 +8,12 @@
 namespace steelyard {
 
 /// Height the head takes in so much width; 0 where nobody is named who could answer for himself.
-float head_height(const RoomView& view, float width);
+float head_height(const RoomView& view, const Id& set, float width);
 
 /// The way of answering, and who answers. `together` says whether the answers of all are shown, and is
-/// changed by its button.
-void draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
-               Box box);
+/// changed by its button. Gives what is left free between, on the first line.
+Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
+              Box box);
 
 /// Sealed, with nobody at the seat: who has answered what, whom to hand over to, and revealing a set. Adds to
 /// `revealed`.

@@ -32,6 +32,10 @@ Row own_row(const RoomView& view, const SetResult& group) {
     if (entry.from_points) row.count = "points";
     const Progress progress = progress_of(view.decision, entry, view.person);
     if (progress.ended && !progress.left.empty()) row.count += ", ended";
+    if (!progress.done() && row.word == "consistent") {
+        row.word = "nearly done";
+        row.open = true;
+    }
     if (ranges_changed(view, entry)) {
         row.word = "other ranges";
         row.open = true;

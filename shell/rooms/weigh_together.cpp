@@ -50,23 +50,12 @@ void TogetherCard::draw_words(Ui& ui, const RoomView& view, const ItemPair& pair
             off_ ? "Let go to take this answer back."
                  : "Proposed: " + pair_sentence(view.decision, set_, pair[0], pair[1], *proposal_) + ".";
         inside.take_top(draw_sentence(ui, inside, text, Font::large, Font::heading, 2, theme.brass_ink) + 4);
+        return;
     }
-    const auto lines = apart_lines(view, set_, pair, said_by_each(view, set_, pair));
-    // The lines in one size, the largest that all of them take.
-    const Font largest = inside.h > 420 ? Font::huge : Font::large;
-    Font font = Font::heading;
-    for (const Font each : {Font::huge, Font::large}) {
-        if (font_size(each) > font_size(largest)) continue;
-        if (std::all_of(lines.begin(), lines.end(),
-                        [&](const std::string& line) { return text_size(each, line).x <= inside.w; })) {
-            font = each;
-            break;
-        }
-    }
-    // Where little height is left the arm goes first.
-    if (inside.h < 300) font = Font::heading;
-    for (const auto& line : lines)
-        inside.take_top(draw_sentence(ui, inside, line, font, std::min(font, Font::heading), 2));
+    // Where there is little height the arm goes first.
+    const Font largest = inside.h > 480 ? Font::huge : inside.h > 340 ? Font::large : Font::heading;
+    inside.take_top(draw_sentences(ui, inside, apart_lines(view, set_, pair, said_by_each(view, set_, pair)),
+                                   largest, Font::heading));
     const auto judges = judges_of(view.decision, *group_entry(view.results, set_), pair);
     std::string abstain;
     for (const auto& person : view.decision.people) {

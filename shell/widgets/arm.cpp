@@ -243,7 +243,7 @@ Beam picture(Ui& ui, const ArmState& state, const std::optional<double>& shown, 
         return beam;
     }
     if (state.other && !shown) arm::draw_poise(ui, beam, position_of(*state.other), arm::PoiseLook::empty);
-    arm::draw_named(ui, state, shown, layout, beam);
+    arm::draw_named(ui, state, layout, beam);
     return beam;
 }
 

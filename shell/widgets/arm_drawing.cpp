@@ -12,18 +12,15 @@
 namespace steelyard::arm {
 namespace {
 
-constexpr int scale_end = 9;            ///< Saaty 1980.
-constexpr double steepest = 7.5;        ///< Degrees of tilt at the end of the graduation.
+constexpr int scale_end = 9;     ///< Saaty 1980.
+constexpr double steepest = 7.5; ///< Degrees of tilt at the end of the graduation.
+constexpr double steepest_beside_names = 4.5;
 const double whole_arm = std::log(9.0); ///< ln of the ratio at either end.
 
 constexpr float beam_beyond = 19; ///< Loads hang a little beyond the last notch.
 constexpr float number_drop = 18; ///< From the beam's middle line to those numbers.
 constexpr float over_poise = 4;   ///< Between a poise and what is written over it.
 constexpr float flag_gap = 5;
-
-float tangent() {
-    return static_cast<float>(std::sin(steepest * std::numbers::pi / 180));
-}
 
 /// Where the loads hang, on the scale of the graduation.
 double end_of(const Beam& beam) {
@@ -133,22 +130,61 @@ float board_height(const ArmState& state, Font font, float width, std::size_t na
            static_cast<float>(ranges) * line_step(Font::small);
 }
 
-float highest_number(const ArmState& state, const std::optional<double>& shown, const Layout& layout) {
+float highest_number(const ArmState& state, const Layout& layout) {
     Beam beam;
     beam.scale = layout.scale;
     float need = beam.poise_height() + over_poise + font_size(layout.load);
-    if (state.other || !shown) need += line_step(Font::small);
+    if (state.other) need += line_step(Font::small) + layout.drop * 0.4f; // On the rising side, perhaps.
     return need;
 }
 
-std::vector<NameWish> wishes_of(const ArmState& state, const std::optional<double>& shown, const Beam& beam,
-                                const std::vector<std::string>& flags, Font font) {
-    std::vector<NameWish> wishes;
-    for (std::size_t i = 0; i < flags.size(); ++i) {
-        const double ratio = i < state.named.size() ? state.named[i].ratio : shown.value_or(1);
-        wishes.push_back({beam.at(position_of(ratio)).x, text_size(font, flags[i]).x});
+std::string times_of(double ratio) {
+    return " \xC3\x97" + ratio_text(ratio >= 1 ? ratio : 1 / ratio);
+}
+
+/// The names at one place in as few lines as take no more than a width, the last one first.
+void add_flags(std::vector<Flag>& flags, const std::vector<std::string>& names, double ratio, bool own,
+               Font font, float width) {
+    std::vector<std::string> lines{""};
+    for (std::size_t i = 0; i < names.size(); ++i) {
+        const std::string name = names[i] + (i + 1 < names.size() ? "," : times_of(ratio));
+        if (lines.back().empty())
+            lines.back() = name;
+        else if (text_size(font, lines.back() + " " + name).x <= width)
+            lines.back() += " " + name;
+        else
+            lines.push_back(name);
     }
-    return wishes;
+    for (auto line = lines.rbegin(); line != lines.rend(); ++line) flags.push_back({ratio, *line, own});
+}
+
+std::vector<Flag> flags_of(const ArmState& state, const std::optional<double>& shown, Font font,
+                           const Beam& beam, const Box& box) {
+    std::vector<Flag> flags;
+    std::vector<bool> taken(state.named.size(), false);
+    for (std::size_t i = 0; i < state.named.size(); ++i) {
+        if (taken[i]) continue;
+        const double ratio = state.named[i].ratio;
+        std::vector<std::string> names;
+        for (std::size_t j = i; j < state.named.size(); ++j) {
+            if (std::abs(std::log(state.named[j].ratio / ratio)) > 1e-9) continue;
+            taken[j] = true;
+            names.push_back(state.named[j].name);
+        }
+        const float x = beam.at(position_of(ratio)).x;
+        const float space = x < beam.pivot.x ? x - box.x : box.right() - x;
+        add_flags(flags, names, ratio, false, font, space - flag_gap);
+    }
+    if (shown) add_flags(flags, {state.own_name}, *shown, true, font, box.w);
+    return flags;
+}
+
+std::vector<PlacedName> placed_flags(const std::vector<Flag>& flags, Font font, const Beam& beam,
+                                     const Box& box) {
+    std::vector<NameWish> wishes;
+    for (const auto& flag : flags)
+        wishes.push_back({beam.at(position_of(flag.ratio)).x, text_size(font, flag.text).x});
+    return place_names(wishes, box.x, box.right(), beam.pivot.x, flag_gap);
 }
 
 } // namespace
@@ -169,57 +205,65 @@ float Beam::poise_height(PoiseLook look) const {
     return thickness(0) + (look == PoiseLook::judge ? weight * small_scale : weight);
 }
 
-Layout lay_out(const ArmState& state, const std::optional<double>& shown, const Box& box) {
+namespace {
+
+/// Sizes that do not depend on how the height is shared out.
+Layout widths(const ArmState& state, const Box& box) {
     Layout layout;
     layout.box = box;
-    layout.scale = std::clamp(std::min(box.w / 640, box.h / 215), 0.82f, 1.5f);
+    // Beside names the arm itself stands back.
+    const bool several = !state.named.empty();
+    layout.scale = std::clamp(std::min(box.w / 640, box.h / 215), 0.82f, several ? 1.1f : 1.5f);
+    layout.steepest = several ? steepest_beside_names : steepest;
     layout.board = std::clamp(box.w * 0.28f, 112.0f, 290.0f);
-    layout.load = layout.scale >= 1.25f ? Font::heading : Font::strong;
+    const bool large = layout.scale >= 1.25f || (several && box.w >= 1000);
+    layout.load = large ? Font::heading : Font::strong;
+    const float lean = static_cast<float>(std::sin(layout.steepest * std::numbers::pi / 180));
     const float whole = std::min((box.w - layout.board) / 2 - 4, 480.0f);
     layout.half = whole - beam_beyond;
-    layout.drop = whole * tangent();
+    layout.drop = whole * lean;
     // Clear of the graduation's numbers, which slant over the load.
-    layout.cord = number_drop + font_size(Font::small) + layout.board / 2 * tangent();
-    float above = highest_number(state, shown, layout);
-    for (layout.name_lines = 2;; layout.name_lines = 1) {
-        layout.board_height = board_height(state, layout.load, layout.board - 16, layout.name_lines);
-        if (layout.name_lines == 1 || above + layout.drop + layout.cord + layout.board_height + 2 <= box.h)
-            break;
-    }
-    const float below = layout.drop + layout.cord + layout.board_height + 2;
+    layout.cord = number_drop + font_size(Font::small) + layout.board / 2 * lean;
+    return layout;
+}
 
-    if (!state.named.empty()) {
-        for (const auto& named : state.named) {
-            const double times = named.ratio >= 1 ? named.ratio : 1 / named.ratio;
-            layout.flags.push_back(named.name + " \xC3\x97" + ratio_text(times));
-        }
-        layout.own_flag = shown.has_value();
-        if (shown)
-            layout.flags.push_back(state.own_name + " \xC3\x97" +
-                                   ratio_text(*shown >= 1 ? *shown : 1 / *shown));
-        Beam beam;
-        beam.pivot = {box.x + box.w / 2, 0};
-        beam.half = layout.half;
-        beam.scale = layout.scale;
-        const float left = box.h - below - beam.poise_height() - layout.drop - 8;
-        for (const Font font : {Font::large, Font::heading, Font::strong, Font::small}) {
-            layout.names = font;
-            const auto placed = place_names(wishes_of(state, shown, beam, layout.flags, font), box.x,
-                                            box.right(), beam.pivot.x, flag_gap);
-            const bool shortened = std::any_of(placed.begin(), placed.end(), [&](const PlacedName& name) {
-                const auto i = static_cast<std::size_t>(&name - placed.data());
-                return name.width < text_size(font, layout.flags[i]).x;
-            });
-            const float rows = static_cast<float>(rows_of(placed)) * line_step(font);
-            above = beam.poise_height() + layout.drop + 8 + rows;
-            if (rows <= left && (!shortened || font == Font::small)) break;
-        }
-    } else {
-        above += state.other ? layout.drop * 0.5f : 0;
+float height_below(const Layout& layout) {
+    return layout.drop + layout.cord + layout.board_height + 6;
+}
+
+/// Takes the largest type in which all names fit into `space`; gives the height they need, poises included.
+float fit_names(Layout& layout, const ArmState& state, const std::optional<double>& shown, float space) {
+    const Beam level = beam_at(layout, 0);
+    float need = 0;
+    for (const Font font : {Font::large, Font::heading, Font::strong, Font::small}) {
+        layout.names = font;
+        layout.flags = flags_of(state, shown, font, level, layout.box);
+        const auto placed = placed_flags(layout.flags, font, level, layout.box);
+        bool shortened = false;
+        for (std::size_t i = 0; i < placed.size(); ++i)
+            shortened = shortened || placed[i].width < 0.6f * text_size(font, layout.flags[i].text).x;
+        need = level.poise_height() + layout.drop + 8 + static_cast<float>(rows_of(placed)) * line_step(font);
+        if (need <= space && !shortened) break;
     }
-    const float spare = std::max(0.0f, box.h - above - below);
-    layout.pivot = {std::round(box.x + box.w / 2), std::round(box.y + above + spare * 0.45f)};
-    layout.foot = std::round(layout.pivot.y + std::min(below - 4, 112.0f * layout.scale));
+    return need;
+}
+
+} // namespace
+
+Layout lay_out(const ArmState& state, const std::optional<double>& shown, const Box& box) {
+    Layout layout = widths(state, box);
+    layout.pivot = {std::round(box.x + box.w / 2), box.y};
+    float above = 0;
+    // Names of loads take a second line only where there is room for it.
+    for (layout.name_lines = 2; layout.name_lines > 0; --layout.name_lines) {
+        layout.board_height = board_height(state, layout.load, layout.board - 16, layout.name_lines);
+        const float space = box.h - height_below(layout);
+        above = state.named.empty() ? highest_number(state, layout) : fit_names(layout, state, shown, space);
+        if (above <= space || layout.name_lines == 1) break;
+    }
+    const float spare = std::max(0.0f, box.h - above - height_below(layout));
+    layout.pivot.y = std::round(box.y + above + spare * 0.45f);
+    layout.foot = std::round(layout.pivot.y + std::min(height_below(layout) - 4, 112.0f * layout.scale));
     return layout;
 }
 
@@ -228,7 +272,7 @@ Beam beam_at(const Layout& layout, double position) {
     beam.pivot = layout.pivot;
     beam.half = layout.half;
     beam.scale = layout.scale;
-    const double angle = position * steepest * std::numbers::pi / 180;
+    const double angle = position * layout.steepest * std::numbers::pi / 180;
     beam.along = {static_cast<float>(std::cos(angle)), static_cast<float>(std::sin(angle))};
     return beam;
 }
@@ -304,18 +348,23 @@ void draw_load(Ui& ui, const Load& load, const Layout& layout, const Beam& beam,
     const float middle = board.x + board.w / 2;
     const float width = board.w - 16;
     const float space = name_space(load, width);
-    float y = board.y + 7;
-    for (const auto& line : lines_of(layout.load, load.name, space, layout.name_lines)) {
+    const auto names = lines_of(layout.load, load.name, space, layout.name_lines);
+    const auto ranges =
+        load.range.empty() ? std::vector<std::string>{} : lines_of(Font::small, load.range, width, 2);
+    const float tall = static_cast<float>(names.size()) * font_size(layout.load) +
+                       static_cast<float>(ranges.size()) * line_step(Font::small);
+    const float first = std::round(board.y + (board.h - tall) / 2);
+    float y = first;
+    for (const auto& line : names) {
         const float name_width = std::min(text_size(layout.load, line).x, space);
-        if (load.starred && y < board.y + 8)
+        if (load.starred && y == first)
             draw_star({middle - name_width / 2 - 3, y + font_size(layout.load) / 2}, 8, theme.brass);
         draw_text(ui, {middle + (width - space) / 2, y}, line,
                   {.font = layout.load, .max_width = space, .align = Align::centre});
         y += font_size(layout.load);
     }
     y += 1;
-    if (load.range.empty()) return;
-    for (const auto& line : lines_of(Font::small, load.range, width, 2)) {
+    for (const auto& line : ranges) {
         draw_text(ui, {middle, y}, line,
                   {.font = Font::small, .ink = theme.quiet, .max_width = width, .align = Align::centre});
         y += line_step(Font::small);
@@ -338,32 +387,36 @@ void draw_loose_poise(const Ui& ui, ImVec2 foot) {
     draw_weight(ui, {foot, {1, 0}, 1}, faded(theme.brass, 150), theme.brass_ink);
 }
 
-void draw_named(Ui& ui, const ArmState& state, const std::optional<double>& shown, const Layout& layout,
-                const Beam& beam) {
+void draw_named(Ui& ui, const ArmState& state, const Layout& layout, const Beam& beam) {
     const Theme& theme = ui.look();
     ImDrawList* list = ImGui::GetWindowDrawList();
-    const auto wishes = wishes_of(state, shown, beam, layout.flags, layout.names);
-    const auto placed = place_names(wishes, layout.box.x, layout.box.right(), layout.pivot.x, flag_gap);
-    const float bottom = layout.pivot.y - beam.poise_height() - layout.drop - 4;
+    const auto placed = placed_flags(layout.flags, layout.names, beam, layout.box);
     const float step = line_step(layout.names);
+    const auto top_of = [&](const Flag& flag) {
+        const PoiseLook look = flag.own ? PoiseLook::own : PoiseLook::judge;
+        return beam.at(position_of(flag.ratio), beam.poise_height(look) - 1);
+    };
+    float bottom = layout.pivot.y;
+    for (const auto& flag : layout.flags) bottom = std::min(bottom, top_of(flag).y - 5);
+    const auto row_top = [&](const PlacedName& name) {
+        return std::round(bottom) - step * static_cast<float>(name.row + 1);
+    };
     for (std::size_t i = 0; i < placed.size(); ++i) {
-        const bool own = layout.own_flag && i + 1 == placed.size();
-        const float y = bottom - step * static_cast<float>(placed[i].row + 1);
-        const double position = position_of(own ? shown.value_or(1) : state.named[i].ratio);
-        const PoiseLook look = own ? PoiseLook::own : PoiseLook::judge;
-        const ImVec2 top = beam.at(position, beam.poise_height(look) - 2);
-        list->AddLine({wishes[i].x, y + 3}, {wishes[i].x, bottom}, own ? theme.brass : theme.edge, 1.5f);
-        list->AddLine({wishes[i].x, bottom}, top, own ? theme.brass : theme.edge, 1.5f);
+        const Flag& flag = layout.flags[i];
+        const ImVec2 top = top_of(flag);
+        const ImU32 colour = flag.own ? theme.brass : theme.edge;
+        const float x = beam.at(position_of(flag.ratio)).x;
+        list->AddLine({x, row_top(placed[i]) + 3}, {x, bottom}, colour, 1.5f);
+        list->AddLine({x, bottom}, top, colour, 1.5f);
     }
+    for (const auto& one : state.named) draw_poise(ui, beam, position_of(one.ratio), PoiseLook::judge);
     for (std::size_t i = 0; i < placed.size(); ++i) {
-        const bool own = layout.own_flag && i + 1 == placed.size();
-        const double position = position_of(own ? shown.value_or(1) : state.named[i].ratio);
-        draw_poise(ui, beam, position, own ? PoiseLook::own : PoiseLook::judge);
-        const float y = bottom - step * static_cast<float>(placed[i].row + 1);
+        const Flag& flag = layout.flags[i];
+        if (flag.own) draw_poise(ui, beam, position_of(flag.ratio), PoiseLook::own);
         const float at = placed[i].to_left ? placed[i].left + placed[i].width : placed[i].left;
-        draw_text(ui, {at, y}, layout.flags[i],
+        draw_text(ui, {at, row_top(placed[i])}, flag.text,
                   {.font = layout.names,
-                   .ink = own ? theme.brass_ink : theme.ink,
+                   .ink = flag.own ? theme.brass_ink : theme.ink,
                    .max_width = placed[i].width + 0.5f,
                    .align = placed[i].to_left ? Align::right : Align::left});
     }

@@ -37,22 +37,29 @@ struct Beam {
     float poise_height(PoiseLook look = PoiseLook::own) const;
 };
 
+/// What is written beside the pole of a poise; those at one place share theirs.
+struct Flag {
+    double ratio = 1;
+    std::string text;
+    bool own = false;
+};
+
 /// Sizes of all parts in a box, the same for every tilt.
 struct Layout {
     Box box;
     ImVec2 pivot;
     float half = 0;
     float scale = 1;
-    float drop = 0;  ///< How far an end sinks at most.
-    float cord = 0;  ///< From the beam's end to a load.
-    float foot = 0;  ///< Of the stand.
-    float board = 0; ///< Width of a load.
+    double steepest = 0; ///< Degrees of tilt at the end of the graduation.
+    float drop = 0;      ///< How far an end sinks at most.
+    float cord = 0;      ///< From the beam's end to a load.
+    float foot = 0;      ///< Of the stand.
+    float board = 0;     ///< Width of a load.
     float board_height = 0;
     std::size_t name_lines = 1;
-    Font load = Font::strong;       ///< Of a load's name, and of the number over the poise.
-    Font names = Font::strong;      ///< Of named poises.
-    std::vector<std::string> flags; ///< What is written at each named poise, the own one last if it is there.
-    bool own_flag = false;
+    Font load = Font::strong;  ///< Of a load's name, and of the number over the poise.
+    Font names = Font::strong; ///< Of named poises.
+    std::vector<Flag> flags;   ///< What is written at the poises, where several judges' stand.
 };
 
 Layout lay_out(const ArmState& state, const std::optional<double>& shown, const Box& box);
@@ -70,7 +77,6 @@ void draw_poise(const Ui& ui, const Beam& beam, double position, PoiseLook look)
 void draw_loose_poise(const Ui& ui, ImVec2 foot);
 
 /// The named poises with their poles and names.
-void draw_named(Ui& ui, const ArmState& state, const std::optional<double>& shown, const Layout& layout,
-                const Beam& beam);
+void draw_named(Ui& ui, const ArmState& state, const Layout& layout, const Beam& beam);
 
 } // namespace steelyard::arm

@@ -27,19 +27,23 @@ std::vector<std::string> broken(std::string_view text, Font font, float width, s
     return lines;
 }
 
+/// The largest of the fonts in which each sentence takes one line.
+Font fitting(const std::vector<std::string>& sentences, float width, Font largest, Font least) {
+    for (const Font each : {Font::huge, Font::large, Font::heading, Font::strong, Font::body, Font::small}) {
+        const float size = font_size(each);
+        if (size > font_size(largest) || size < font_size(least)) continue;
+        if (std::all_of(sentences.begin(), sentences.end(),
+                        [&](const std::string& text) { return text_size(each, text).x <= width; }))
+            return each;
+    }
+    return least;
+}
+
 } // namespace
 
 float draw_sentence(Ui& ui, const Box& box, std::string_view text, Font largest, Font least,
                     std::size_t lines, ImU32 ink) {
-    Font font = least;
-    for (const Font each : {Font::huge, Font::large, Font::heading, Font::strong, Font::body, Font::small}) {
-        const float size = font_size(each);
-        if (size > font_size(largest) || size < font_size(least)) continue;
-        if (text_size(each, text).x <= box.w) {
-            font = each;
-            break;
-        }
-    }
+    const Font font = fitting({std::string(text)}, box.w, largest, least);
     // Lines of about one length: the narrowest width that takes no line more.
     auto shown = broken(text, font, box.w, lines);
     for (float width = box.w * 0.95f; shown.size() > 1 && width > box.w / 3; width -= box.w * 0.05f) {
@@ -53,6 +57,14 @@ float draw_sentence(Ui& ui, const Box& box, std::string_view text, Font largest,
                   {.font = font, .ink = ink, .max_width = box.w, .align = Align::centre});
         y += line_step(font);
     }
+    return y - box.y;
+}
+
+float draw_sentences(Ui& ui, const Box& box, const std::vector<std::string>& sentences, Font largest,
+                     Font least, ImU32 ink) {
+    const Font font = fitting(sentences, box.w, largest, least);
+    float y = box.y;
+    for (const auto& text : sentences) y += draw_sentence(ui, {box.x, y, box.w, 0}, text, font, font, 2, ink);
     return y - box.y;
 }
 
