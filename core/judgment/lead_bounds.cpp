@@ -103,7 +103,7 @@ LeadBox LeadBounds::whole(std::vector<std::size_t> leads) {
     return box;
 }
 
-std::vector<LeadBox> LeadBounds::halves(const LeadBox& box) {
+std::vector<LeadBox> LeadBounds::halves(const LeadBox& box) const {
     std::size_t widest = 0;
     double width = 0;
     for (std::size_t p = 0; p < box.low.size(); ++p) {
@@ -117,7 +117,6 @@ std::vector<LeadBox> LeadBounds::halves(const LeadBox& box) {
     if (width < narrow_enough) return halves;
     halves.assign(2, box);
     halves[0].high[widest] = halves[1].low[widest] = (box.low[widest] + box.high[widest]) / 2;
-    for (auto& half : halves) bound(half);
     return halves;
 }
 

@@ -35,8 +35,13 @@ public:
     /// All answers in their ranges, and what of these leads is not proven over them.
     LeadBox whole(std::vector<std::size_t> leads);
 
-    /// The two halves of a box, cut where its range is widest; none where no half can still differ.
-    std::vector<LeadBox> halves(const LeadBox& box);
+    /// The two halves of a box, cut where its range is widest, their bounds still those of the whole; none
+    /// where it is too small to cut.
+    std::vector<LeadBox> halves(const LeadBox& box) const;
+
+    /// Tightens a box's bounds and takes away the leads that are proven over it: all, where no answers of the
+    /// box can be.
+    void bound(LeadBox& box);
 
     /// Whether the bound of this lead is the least value itself, so that cutting boxes gains nothing.
     bool exact(std::size_t lead) const;
@@ -52,7 +57,6 @@ private:
         std::size_t judge, i, j, at;
     };
 
-    void bound(LeadBox& box);
     bool narrow(LeadBox& box, std::size_t judge, bool first, double& gain);
     EntryBounds entries(const LeadBox& box, std::size_t judge) const;
     bool narrow_completed(LeadBox& box, std::size_t judge) const;

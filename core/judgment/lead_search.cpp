@@ -75,6 +75,7 @@ struct LeadSearch::Work {
     double descended = 0;
 
     std::map<std::pair<double, int>, LeadBox> queue; ///< By bound, then by age.
+    std::vector<LeadBox> halves;                     ///< Cut, not looked into.
     int boxes = 0;
     int most_boxes = 0;
 };
@@ -220,29 +221,28 @@ void LeadSearch::Work::after_searching() {
     phase = Phase::boxes;
 }
 
+/// Cuts the box of least bound; its halves are looked into one by one.
 void LeadSearch::Work::cut_a_box() {
-    if (queue.empty() || boxes >= most_boxes) {
-        state = queue.empty() ? LeadState::kept : LeadState::unknown;
-        return;
-    }
-    const LeadBox box = std::move(queue.begin()->second);
-    queue.erase(queue.begin());
-    auto halves = bounds->halves(box);
-    cost += bounds->take_cost();
     if (halves.empty()) {
-        state = LeadState::unknown;
+        if (queue.empty() || boxes >= most_boxes) {
+            state = queue.empty() ? LeadState::kept : LeadState::unknown;
+            return;
+        }
+        halves = bounds->halves(queue.begin()->second);
+        queue.erase(queue.begin());
+        if (halves.empty()) state = LeadState::unknown;
         return;
     }
-    for (auto& half : halves) {
-        ++boxes;
-        if (half.leads.empty()) continue;
-        std::vector<double> centre(answers());
-        for (std::size_t p = 0; p < centre.size(); ++p)
-            centre[p] = std::exp((half.low[p] + half.high[p]) / 2);
-        try_answers(centre);
-        if (state == LeadState::lost) return;
-        queue.emplace(std::pair{half.bound, boxes}, std::move(half));
-    }
+    LeadBox box = std::move(halves.back());
+    halves.pop_back();
+    ++boxes;
+    bounds->bound(box);
+    cost += bounds->take_cost();
+    if (box.leads.empty()) return;
+    std::vector<double> centre(answers());
+    for (std::size_t p = 0; p < centre.size(); ++p) centre[p] = std::exp((box.low[p] + box.high[p]) / 2);
+    try_answers(centre);
+    queue.emplace(std::pair{box.bound, boxes}, std::move(box));
 }
 
 LeadSearch::LeadSearch(OpenSet set, LeadQuestion question)
