@@ -1,9 +1,10 @@
 #include "core/judgment/lead_search.hpp"
 
+#include <algorithm>
 #include <array>
 #include <catch_amalgamated.hpp>
+#include <cmath>
 #include <map>
-#include <string>
 #include <vector>
 
 #include "tests/support/close.hpp"
@@ -35,10 +36,17 @@ OpenCase varied_case(Method method, std::size_t number, std::size_t most_items) 
     Dice dice(number);
     OpenCaseSize size;
     size.items = static_cast<std::size_t>(dice.between(4, static_cast<int>(most_items)));
-    size.open = dice.between(1, 4);
+    size.open = dice.chance(80) ? dice.between(1, 4) : dice.between(5, 9);
     size.judges = dice.chance(70) ? 1 : dice.between(2, 3);
     if (method != Method::column_average && dice.chance(25)) size.stay = dice.between(1, 2);
     return random_open_case(method, all_kinds[number % all_kinds.size()], size, number);
+}
+
+bool stays_incomplete(const OpenCase& open) {
+    const auto pairs = open.items * (open.items - 1) / 2;
+    return std::any_of(open.judges.begin(), open.judges.end(), [&](const OpenJudge& judge) {
+        return judge.known.judged_pairs().size() + judge.open.size() < pairs;
+    });
 }
 
 /// Proven ones are attacked, found ones computed anew. Returns how many there were of each state.
@@ -49,7 +57,10 @@ std::map<LeadState, int> attack(Method method, std::size_t sets, std::size_t mos
         const OpenCase open = varied_case(method, number, most_items);
         const LeadSearch search = run(open);
         ++count[search.state()];
-        if (search.state() == LeadState::kept) CHECK_FALSE(turning_answers(open, tries, number));
+        // Completing a set takes long beside all else here.
+        const bool completes = method == Method::eigenvector && stays_incomplete(open);
+        if (search.state() == LeadState::kept)
+            CHECK_FALSE(turning_answers(open, completes ? tries / 20 : tries, number));
         if (search.state() != LeadState::lost) continue;
         REQUIRE(search.answers().size() == open.ranges.size());
         for (std::size_t p = 0; p < open.ranges.size(); ++p) {
@@ -137,8 +148,8 @@ TEST_CASE("lead search: two items, the answer that turns the lead lies where the
 }
 
 TEST_CASE("lead search: three items with one open pair, against the formula") {
-    // Geometric means of a12 = 2, a23 = x, a13 = 4: w3/w1 = (4 * 4 * x * 2)^(-1/3)... the lead rest + w3 - w1
-    // turns where w1 - w3 = rest. w = (8^(1/3), (x/2)^(1/3), (1/(4x))^(1/3)).
+    // a12 = 2, a13 = 4, a23 = x: geometric means w ~ 8^(1/3), (x/2)^(1/3), (1/(4x))^(1/3); the lead is
+    // rest + w3 - w1.
     const auto lead = [](double x, double rest) {
         const double a = std::cbrt(8.0);
         const double b = std::cbrt(x / 2);
