@@ -1,0 +1,272 @@
+#include "core/results/open_leads.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <map>
+#include <utility>
+
+#include "core/decision/lookup.hpp"
+#include "core/judgment/judged_set.hpp"
+#include "core/results/score_parts.hpp"
+#include "core/results/solve.hpp"
+
+namespace steelyard {
+namespace {
+
+using Pair = PairMatrix::Pair;
+
+bool weighs(Method method, const PairMatrix& pairs) {
+    return method == Method::column_average ? pairs.complete() : pairs.connected();
+}
+
+/// The sets of a decision in which the open pairs are answered, told apart from those that are known.
+class OpenSetBuilder {
+public:
+    /// `answered`: the decision with any answers to the open pairs. It must outlive this.
+    OpenSetBuilder(const Decision& answered, const OpenPairs& open)
+        : d_(answered), open_(open), judged_(answered) {}
+
+    /// The items of the options' set on a leaf: those in play, or all where only all of them hang together.
+    std::vector<Id> options(const Node& leaf, const std::vector<Id>& in_play) const {
+        const auto connected = [&](const std::vector<Id>& items) {
+            return group_matrix(judged_.gather(leaf.id, items, true)).connected();
+        };
+        std::vector<Id> all = set_items(d_, leaf.id);
+        return !connected(in_play) && connected(all) ? all : in_play;
+    }
+
+    /// None where the answers do not give weights. `who` and `turned`: see OpenLeads.
+    std::optional<OpenSet> build(const std::vector<Id>& items, bool items_are_options,
+                                 std::vector<std::size_t>& who, std::vector<bool>& turned) {
+        const JudgedSet judged = judged_.gather(open_.set, items, items_are_options);
+        answers_.clear();
+        for (std::size_t p = 0; p < open_.pairs.size(); ++p) {
+            const auto place = [&](const Id& id) {
+                return static_cast<std::size_t>(std::find(items.begin(), items.end(), id) - items.begin());
+            };
+            const std::size_t a = place(open_.pairs[p][0]);
+            const std::size_t b = place(open_.pairs[p][1]);
+            if (a == b || std::max(a, b) >= items.size()) continue;
+            if (!answers_.emplace(Pair{std::min(a, b), std::max(a, b)}, who.size()).second) continue;
+            who.push_back(p);
+            turned.push_back(a > b);
+        }
+        const Settings& settings = d_.settings;
+        std::vector<OpenJudge> judges;
+        if (settings.combine != Combine::judgments) {
+            for (const auto& judge : judged.judges) {
+                if (judge.share == 0 || !weighs(settings.method, judge_matrix(judge, judged.agreed)))
+                    continue;
+                judges.push_back(of_judge(judge, judged.agreed));
+            }
+        }
+        if (judges.empty()) {
+            if (!weighs(settings.method, group_matrix(judged))) return std::nullopt;
+            judges.push_back(of_group(judged));
+        }
+        const bool arithmetic = settings.combine == Combine::priorities_arithmetic && judges.size() > 1;
+        return OpenSet(settings.method, arithmetic, judges, std::vector<AnswerRange>(who.size()));
+    }
+
+private:
+    /// The answer that decides this pair in what one voice says, if any does.
+    std::optional<std::size_t> answer_of(const Pair& pair, const Id& voice) const {
+        const auto found = answers_.find(pair);
+        if (found == answers_.end() || voice != open_.by) return std::nullopt;
+        return found->second;
+    }
+
+    OpenJudge of_judge(const JudgeAnswers& judge, const PairMatrix& agreed) const {
+        OpenJudge open{judge.share, judge_matrix(judge, agreed), {}};
+        for (const auto& pair : open.known.judged_pairs()) {
+            const bool in_room = agreed.judged(pair[0], pair[1]);
+            if (const auto answer = answer_of(pair, in_room ? Id{} : judge.person)) {
+                open.known.clear(pair[0], pair[1]);
+                open.open.push_back({pair[0], pair[1], *answer});
+            }
+        }
+        return open;
+    }
+
+    OpenJudge of_group(const JudgedSet& judged) const {
+        OpenJudge open{1, group_matrix(judged), {}};
+        for (const auto& [i, j] : open.known.judged_pairs()) {
+            const auto place = [&](std::size_t answer, double factor, double fixed) {
+                open.known.clear(i, j);
+                open.open.push_back({i, j, answer, factor, fixed});
+            };
+            if (judged.agreed.judged(i, j)) {
+                if (const auto answer = answer_of({i, j}, Id{})) place(*answer, 1, 0);
+                continue;
+            }
+            double shares = 0;
+            double fixed = 0;
+            double own = 0;
+            std::optional<std::size_t> answer;
+            for (const auto& judge : judged.judges) {
+                if (!judge.own.judged(i, j) || judge.share == 0) continue;
+                shares += judge.share;
+                if (const auto his = answer_of({i, j}, judge.person)) {
+                    answer = his;
+                    own = judge.share;
+                } else {
+                    fixed += judge.share * std::log(judge.own.at(i, j));
+                }
+            }
+            if (answer) place(*answer, own / shares, fixed / shares);
+        }
+        return open;
+    }
+
+    const Decision& d_;
+    const OpenPairs& open_;
+    JudgmentsBySet judged_;
+    std::map<Pair, std::size_t> answers_; ///< By places in the items.
+};
+
+/// Musts on the worth of a node that the set has a part in; a waived one or one without limits excludes
+/// nobody.
+std::vector<const Requirement*> musts_above(const Decision& decision, const Id& set) {
+    std::vector<const Requirement*> musts;
+    for (const auto& requirement : decision.requirements) {
+        const bool limits = requirement.min_worth || requirement.at_least || requirement.at_most;
+        if (requirement.node.empty() || requirement.waived || !limits) continue;
+        const Node* node = find_node(decision.criteria, requirement.node);
+        if (node != nullptr && find_node(*node, set) != nullptr) musts.push_back(&requirement);
+    }
+    return musts;
+}
+
+/// Leads that stay above 0 as long as every option stays on its side of the musts' limits. Worths of nodes
+/// are those of ideal synthesis over the options that meet all musts of other kinds, and linear in the
+/// weights of a set of criteria below.
+std::vector<Lead> guards(const Decision& decision, const Results& results, const Node& node,
+                         const std::vector<const Requirement*>& musts) {
+    std::vector<Lead> leads;
+    if (musts.empty()) return leads;
+    Decision field_of = decision;
+    std::erase_if(field_of.requirements, [](const Requirement& r) { return !r.node.empty(); });
+    field_of.settings.synthesis = Synthesis::ideal;
+    const Results field = solve(field_of);
+    const ScoreParts parts(field_of, field);
+    for (const Requirement* must : musts) {
+        const Node& of = *find_node(decision.criteria, must->node);
+        // While some other set has no weights the must is undecided, whatever the answers are.
+        if (!parts.weighed(of, node.id)) continue;
+        const double share = parts.share(of, node.id);
+        // An option fails below the lower limit with what is missing at 1, above the upper one with it at 0.
+        const auto guard = [&](std::size_t option, double limit, bool lower, bool fails) {
+            const double missing = lower ? 1 : 0;
+            const double side = lower == fails ? -1 : 1;
+            Lead lead;
+            lead.rest = side * (parts.value(of, missing)[option] -
+                                share * parts.value(node, missing)[option] - limit);
+            for (const auto& child : node.children)
+                lead.effect.push_back(side * share * parts.value(child, missing)[option]);
+            leads.push_back(std::move(lead));
+        };
+        std::optional<double> least = must->at_least;
+        if (must->min_worth) least = std::max(*must->min_worth, least.value_or(*must->min_worth));
+        for (std::size_t o = 0; o < field.options.size(); ++o) {
+            const auto state =
+                std::find_if(results.musts.begin(), results.musts.end(), [&](const MustResult& m) {
+                    return m.requirement == must->id && m.option == field.options[o];
+                });
+            if (state->state != MustState::failed) {
+                if (least) guard(o, *least, true, false);
+                if (must->at_most) guard(o, *must->at_most, false, false);
+            } else if (least && parts.value(of, 1)[o] < *least) {
+                guard(o, *least, true, true);
+            } else {
+                guard(o, *must->at_most, false, true);
+            }
+        }
+    }
+    return leads;
+}
+
+} // namespace
+
+Decision with_answers(const Decision& decision, const OpenPairs& open, const std::vector<double>& ratios) {
+    Decision answered = decision;
+    for (std::size_t p = 0; p < open.pairs.size(); ++p) {
+        Judgment judgment;
+        judgment.set = open.set;
+        judgment.by = open.by;
+        judgment.a = open.pairs[p][0];
+        judgment.b = open.pairs[p][1];
+        judgment.ratio = ratios[p];
+        answered.judgments.push_back(std::move(judgment));
+    }
+    return answered;
+}
+
+OpenLeadsFinding find_open_leads(const Decision& decision, const Results& results, const OpenPairs& open) {
+    OpenLeadsFinding finding;
+    const Node* node = find_node(decision.criteria, open.set);
+    const bool criteria = node != nullptr && node->children.size() >= 2 && node->weights == WeightsBy::pairs;
+    const bool options = node != nullptr && node->is_leaf() && node->rate == RateBy::pairs;
+    const bool grades = node != nullptr && node->is_leaf() && node->rate == RateBy::grade &&
+                        node->worths == WorthsBy::pairs && node->grades.size() >= 2;
+    if (!criteria && !options && !grades) {
+        finding.why = "This is not a set of pairs.";
+        return finding;
+    }
+    const std::string name = "\"" + node_name(decision, node->id) + "\"";
+    if (!open.by.empty() && find_person(decision, open.by) == nullptr) {
+        finding.why = "There is no such person.";
+        return finding;
+    }
+    if (!results.first) {
+        finding.why = "No option is in play.";
+        return finding;
+    }
+    const auto musts = musts_above(decision, open.set);
+    if (!musts.empty()) {
+        finding.try_out = true;
+        finding.why =
+            "A must on the worth of \"" + node_name(decision, musts.front()->node) +
+            "\" hangs on these answers; trying found no change of first place, but none is ruled out.";
+        if (!criteria) return finding;
+    }
+    if (musts.empty() && results.options.size() == 1) {
+        finding.nothing_changes = true;
+        finding.why = "Only one option is in play.";
+        return finding;
+    }
+
+    const Decision answered = with_answers(decision, open, std::vector<double>(open.pairs.size(), 1.0));
+    OpenSetBuilder builder(answered, open);
+    const ScoreParts parts(decision, results);
+    std::vector<Id> items = set_items(decision, node->id);
+    if (options) items = builder.options(*node, results.options);
+    std::vector<std::size_t> who;
+    std::vector<bool> turned;
+    auto set = builder.build(items, options, who, turned);
+    if (!set) {
+        finding.try_out = false;
+        finding.why = "With these answers " + name + " would still give no weights.";
+        return finding;
+    }
+    const auto effects = criteria  ? parts.of_criteria(*node)
+                         : options ? parts.of_options(*node, items)
+                                   : parts.of_grades(*node);
+    const auto rest = parts.rest(*node);
+    OpenLeads leads{
+        std::move(*set), {{}, effects.part, effects.largest}, {}, std::move(who), std::move(turned)};
+    const std::size_t first = *results.first;
+    for (std::size_t o = 0; o < results.options.size(); ++o) {
+        if (o == first) continue;
+        Lead lead{rest[first] - rest[o], {}};
+        for (std::size_t i = 0; i < items.size(); ++i)
+            lead.effect.push_back(effects.values[first][i] - effects.values[o][i]);
+        leads.question.leads.push_back(std::move(lead));
+        leads.rivals.push_back(results.options[o]);
+    }
+    for (auto& guard : guards(decision, results, *node, musts))
+        leads.question.leads.push_back(std::move(guard));
+    finding.leads = std::move(leads);
+    return finding;
+}
+
+} // namespace steelyard
