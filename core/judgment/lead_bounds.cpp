@@ -30,7 +30,7 @@ VectorXd centre_logs(const AffineLogs& logs, const LeadBox& box) {
 
 } // namespace
 
-LeadBounds::LeadBounds(const OpenSet& set, const LeadQuestion& question) : set_(set), question_(question) {
+LeadBounds::LeadBounds(const OpenSet& set, const std::vector<Lead>& leads) : set_(set), leads_(leads) {
     assert(set.method() != Method::column_average);
     const auto& judges = set.moving();
     const std::size_t answers = set.ranges().size();
@@ -66,7 +66,7 @@ double LeadBounds::take_cost() {
 }
 
 bool LeadBounds::exact(std::size_t lead) const {
-    const bool one_form = !question_.largest || question_.leads[lead].rest <= 0;
+    const bool one_form = !leads_[lead].largest || leads_[lead].rest <= 0;
     return together_ && together_->by_pairs && one_form && !too_many_orders_;
 }
 
@@ -233,13 +233,13 @@ Grid LeadBounds::combined_ratios(const LeadBox& box) const {
 /// exactly where the forms of all items are; with rest > 0, where one of them is. In both cases it is enough
 /// that the form of each item is while that item is the largest.
 double LeadBounds::lower(const LeadBox& box, std::size_t index, const Grid& combined) {
-    const Lead& lead = question_.leads[index];
-    if (!question_.largest) return lower_form(box, lead_form(question_, lead, 0), combined);
+    const Lead& lead = leads_[index];
+    if (!lead.largest) return lower_form(box, lead_form(lead, 0), combined);
     double all = std::numeric_limits<double>::infinity();
     double any = -all;
     for (std::size_t k = 0; k < set_.size(); ++k) {
-        if (question_.part[k] <= 0) continue;
-        const auto form = lead_form(question_, lead, k);
+        if (lead.part[k] <= 0) continue;
+        const auto form = lead_form(lead, k);
         const double least = lower_form(box, form, combined);
         any = std::max(any, least);
         if (combined.size() == 0) {
@@ -249,7 +249,7 @@ double LeadBounds::lower(const LeadBox& box, std::size_t index, const Grid& comb
         bool possible = true;
         Grid capped = combined;
         for (std::size_t i = 0; i < set_.size(); ++i) {
-            if (question_.part[i] <= 0) continue;
+            if (lead.part[i] <= 0) continue;
             possible = possible && combined(at(k), at(i)) >= 1;
             capped(at(i), at(k)) = std::min(capped(at(i), at(k)), 1.0);
         }

@@ -30,7 +30,7 @@ struct LeadBox {
 class LeadBounds {
 public:
     /// Both must outlive this. Not for averaged columns.
-    LeadBounds(const OpenSet& set, const LeadQuestion& question);
+    LeadBounds(const OpenSet& set, const std::vector<Lead>& leads);
 
     /// All answers in their ranges, and what of these leads is not proven over them.
     LeadBox whole(std::vector<std::size_t> leads);
@@ -67,7 +67,7 @@ private:
     Grid combined_ratios(const LeadBox& box) const;
 
     const OpenSet& set_;
-    const LeadQuestion& question_;
+    const std::vector<Lead>& leads_;
     std::vector<AffineLogs> logs_;       ///< Of each moving judge's geometric means.
     std::optional<AffineLogs> together_; ///< Of the combined weights, where they are of this kind.
     std::vector<Completed> completed_;

@@ -22,16 +22,16 @@ constexpr double most_descending = 2e8; ///< Operations in all.
 } // namespace
 
 struct LeadSearch::Work {
-    Work(OpenSet s, LeadQuestion q) : set(std::move(s)), question(std::move(q)) {
-        if (set.method() != Method::column_average) bounds.emplace(set, question);
+    Work(OpenSet s, std::vector<Lead> l) : set(std::move(s)), leads(std::move(l)) {
+        if (set.method() != Method::column_average) bounds.emplace(set, leads);
         const double n = static_cast<double>(set.size());
         evaluation = static_cast<double>(set.moving().size()) * (10 * n * n * n + 6000) + 100;
         most_boxes = set.size() <= 10 ? 2000 : std::max(50, static_cast<int>(2e6 / (n * n * n)));
-        best.resize(question.leads.size());
-        open.resize(question.leads.size());
+        best.resize(leads.size());
+        open.resize(leads.size());
         std::iota(open.begin(), open.end(), std::size_t{0});
     }
-    Work(const Work&) = delete; // bounds refers to set and question.
+    Work(const Work&) = delete; // bounds refers to set and leads.
 
     struct Best {
         double value = 0;
@@ -52,7 +52,7 @@ struct LeadSearch::Work {
     std::size_t answers() const { return set.ranges().size(); }
 
     OpenSet set;
-    LeadQuestion question;
+    std::vector<Lead> leads;
     std::optional<LeadBounds> bounds;
 
     LeadState state = LeadState::searching;
@@ -85,7 +85,7 @@ void LeadSearch::Work::try_answers(const std::vector<double>& answers) {
     cost += evaluation;
     const Weights w = set.weights(answers);
     for (const auto lead : open) {
-        const double value = lead_value(question, question.leads[lead], w);
+        const double value = lead_value(leads[lead], w);
         if (best[lead].answers.empty() || value < best[lead].value) best[lead] = {value, answers};
         if (value >= -lead_margin || state != LeadState::searching) continue;
         state = LeadState::lost;
@@ -135,14 +135,14 @@ void LeadSearch::Work::advance() {
 void LeadSearch::Work::look_at_bounds() {
     // Geometric means lead by lead, since each takes its time; the eigenvector's bounds serve all leads.
     const bool one_by_one = set.method() == Method::geometric_mean;
-    std::vector<std::size_t> leads;
+    std::vector<std::size_t> asked;
     if (one_by_one) {
-        leads.push_back(open.front());
+        asked.push_back(open.front());
         open.erase(open.begin());
     } else {
-        leads.swap(open);
+        asked.swap(open);
     }
-    LeadBox box = bounds->whole(std::move(leads));
+    LeadBox box = bounds->whole(std::move(asked));
     cost += bounds->take_cost();
     tried.insert(tried.end(), box.leads.begin(), box.leads.end());
     if (!open.empty()) return;
@@ -180,7 +180,7 @@ void LeadSearch::Work::sample() {
 void LeadSearch::Work::start_from_geometric_means() {
     phase = Phase::descent;
     const OpenSet means = set.with_geometric_means();
-    LeadBounds by_means(means, question);
+    LeadBounds by_means(means, leads);
     by_means.whole(open);
     cost += by_means.take_cost();
     for (const auto& at : by_means.least_at()) {
@@ -245,8 +245,8 @@ void LeadSearch::Work::cut_a_box() {
     queue.emplace(std::pair{box.bound, boxes}, std::move(box));
 }
 
-LeadSearch::LeadSearch(OpenSet set, LeadQuestion question)
-    : work_(std::make_unique<Work>(std::move(set), std::move(question))) {}
+LeadSearch::LeadSearch(OpenSet set, std::vector<Lead> leads)
+    : work_(std::make_unique<Work>(std::move(set), std::move(leads))) {}
 LeadSearch::~LeadSearch() = default;
 LeadSearch::LeadSearch(LeadSearch&&) noexcept = default;
 LeadSearch& LeadSearch::operator=(LeadSearch&&) noexcept = default;

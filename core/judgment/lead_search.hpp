@@ -32,7 +32,7 @@ enum class LeadState {
 /// that lies outside the range, what is proven does not speak of it.
 class LeadSearch {
 public:
-    LeadSearch(OpenSet set, LeadQuestion question);
+    LeadSearch(OpenSet set, std::vector<Lead> leads);
     ~LeadSearch();
     LeadSearch(LeadSearch&&) noexcept;
     LeadSearch& operator=(LeadSearch&&) noexcept;

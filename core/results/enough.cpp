@@ -97,7 +97,7 @@ void EnoughSearch::Work::start() {
     if (finding.nothing_changes) {
         end(EnoughAnswer::Verdict::proven_no, finding.why);
     } else if (finding.leads) {
-        search.emplace(finding.leads->set, finding.leads->question);
+        search.emplace(finding.leads->set, finding.leads->leads);
         phase = Phase::leads;
     } else if (finding.try_out) {
         phase = Phase::try_out;

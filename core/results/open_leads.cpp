@@ -1,7 +1,9 @@
 #include "core/results/open_leads.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
+#include <iterator>
 #include <map>
 #include <utility>
 
@@ -137,32 +139,62 @@ std::vector<const Requirement*> musts_above(const Decision& decision, const Id& 
     return musts;
 }
 
+/// What kind of set the open pairs are of.
+enum class SetKind { none, criteria, options, grades };
+
+SetKind kind_of(const Node* node) {
+    if (node == nullptr) return SetKind::none;
+    if (!node->is_leaf())
+        return node->children.size() >= 2 && node->weights == WeightsBy::pairs ? SetKind::criteria
+                                                                               : SetKind::none;
+    if (node->rate == RateBy::pairs) return SetKind::options;
+    const bool judged =
+        node->rate == RateBy::grade && node->worths == WorthsBy::pairs && node->grades.size() >= 2;
+    return judged ? SetKind::grades : SetKind::none;
+}
+
+ScoreParts::Effects effects_of(const ScoreParts& parts, const Node& node, SetKind kind,
+                               const std::vector<Id>& items, std::optional<double> missing_as = {}) {
+    switch (kind) {
+    case SetKind::options: return parts.of_options(items);
+    case SetKind::grades: return parts.of_grades(node);
+    case SetKind::criteria:
+    case SetKind::none: break;
+    }
+    return parts.of_criteria(node, missing_as);
+}
+
 /// Leads that stay above 0 as long as every option stays on its side of the musts' limits. Worths of nodes
-/// are those of ideal synthesis over the options that meet all musts of other kinds, and linear in the
-/// weights of a set of criteria below.
-std::vector<Lead> guards(const Decision& decision, const Results& results, const Node& node,
-                         const std::vector<const Requirement*>& musts) {
+/// are those of ideal synthesis over the field, the options that meet all musts of other kinds. None where
+/// the options of the set are other ones in the field than in play, so that its weights are others.
+std::optional<std::vector<Lead>> guards(const Decision& decision, const Results& results, const Node& node,
+                                        SetKind kind, const std::vector<Id>& items,
+                                        const std::vector<const Requirement*>& musts) {
     std::vector<Lead> leads;
     if (musts.empty()) return leads;
     Decision field_of = decision;
     std::erase_if(field_of.requirements, [](const Requirement& r) { return !r.node.empty(); });
     field_of.settings.synthesis = Synthesis::ideal;
     const Results field = solve(field_of);
+    if (kind == SetKind::options && field.options != results.options) return std::nullopt;
     const ScoreParts parts(field_of, field);
+    const std::array effects{effects_of(parts, node, kind, items, 0),
+                             effects_of(parts, node, kind, items, 1)};
     for (const Requirement* must : musts) {
         const Node& of = *find_node(decision.criteria, must->node);
         // While some other set has no weights the must is undecided, whatever the answers are.
         if (!parts.weighed(of, node.id)) continue;
         const double share = parts.share(of, node.id);
         // An option fails below the lower limit with what is missing at 1, above the upper one with it at 0.
-        const auto guard = [&](std::size_t option, double limit, bool lower, bool fails) {
+        const auto guard = [&](std::size_t o, double limit, bool lower, bool fails) {
             const double missing = lower ? 1 : 0;
             const double side = lower == fails ? -1 : 1;
-            Lead lead;
-            lead.rest = side * (parts.value(of, missing)[option] -
-                                share * parts.value(node, missing)[option] - limit);
-            for (const auto& child : node.children)
-                lead.effect.push_back(side * share * parts.value(child, missing)[option]);
+            const auto& here = effects[lower ? 1 : 0];
+            double rest = parts.value(of, missing)[o] - share * parts.value(node, missing)[o] - limit;
+            if (here.missing[o]) rest += share * missing;
+            Lead lead{side * rest, {}, here.part, here.largest};
+            for (const double value : here.values[o])
+                lead.effect.push_back(here.missing[o] ? 0 : side * share * value);
             leads.push_back(std::move(lead));
         };
         std::optional<double> least = must->at_least;
@@ -204,67 +236,56 @@ Decision with_answers(const Decision& decision, const OpenPairs& open, const std
 OpenLeadsFinding find_open_leads(const Decision& decision, const Results& results, const OpenPairs& open) {
     OpenLeadsFinding finding;
     const Node* node = find_node(decision.criteria, open.set);
-    const bool criteria = node != nullptr && node->children.size() >= 2 && node->weights == WeightsBy::pairs;
-    const bool options = node != nullptr && node->is_leaf() && node->rate == RateBy::pairs;
-    const bool grades = node != nullptr && node->is_leaf() && node->rate == RateBy::grade &&
-                        node->worths == WorthsBy::pairs && node->grades.size() >= 2;
-    if (!criteria && !options && !grades) {
-        finding.why = "This is not a set of pairs.";
-        return finding;
-    }
-    const std::string name = "\"" + node_name(decision, node->id) + "\"";
-    if (!open.by.empty() && find_person(decision, open.by) == nullptr) {
-        finding.why = "There is no such person.";
-        return finding;
-    }
-    if (!results.first) {
-        finding.why = "No option is in play.";
-        return finding;
-    }
+    const SetKind kind = kind_of(node);
     const auto musts = musts_above(decision, open.set);
+    if (kind == SetKind::none) {
+        finding.why = "This is not a set of pairs.";
+    } else if (!open.by.empty() && find_person(decision, open.by) == nullptr) {
+        finding.why = "There is no such person.";
+    } else if (!results.first) {
+        finding.why = "No option is in play.";
+    } else if (musts.empty() && results.options.size() == 1) {
+        finding.nothing_changes = true;
+        finding.why = "Only one option is in play.";
+    }
+    if (!finding.why.empty()) return finding;
+
+    const Decision answered = with_answers(decision, open, std::vector<double>(open.pairs.size(), 1.0));
+    OpenSetBuilder builder(answered, open);
+    std::vector<Id> items = set_items(decision, node->id);
+    if (kind == SetKind::options) items = builder.options(*node, results.options);
+    std::vector<std::size_t> who;
+    std::vector<bool> turned;
+    auto set = builder.build(items, kind == SetKind::options, who, turned);
+    if (!set) {
+        finding.why =
+            "With these answers \"" + node_name(decision, node->id) + "\" would still give no weights.";
+        return finding;
+    }
     if (!musts.empty()) {
         finding.try_out = true;
         finding.why =
             "A must on the worth of \"" + node_name(decision, musts.front()->node) +
             "\" hangs on these answers; trying found no change of first place, but none is ruled out.";
-        if (!criteria) return finding;
     }
-    if (musts.empty() && results.options.size() == 1) {
-        finding.nothing_changes = true;
-        finding.why = "Only one option is in play.";
-        return finding;
-    }
+    auto more = guards(decision, results, *node, kind, items, musts);
+    if (!more) return finding;
 
-    const Decision answered = with_answers(decision, open, std::vector<double>(open.pairs.size(), 1.0));
-    OpenSetBuilder builder(answered, open);
+    OpenLeads leads{std::move(*set), {}, std::move(who), std::move(turned)};
     const ScoreParts parts(decision, results);
-    std::vector<Id> items = set_items(decision, node->id);
-    if (options) items = builder.options(*node, results.options);
-    std::vector<std::size_t> who;
-    std::vector<bool> turned;
-    auto set = builder.build(items, options, who, turned);
-    if (!set) {
-        finding.try_out = false;
-        finding.why = "With these answers " + name + " would still give no weights.";
-        return finding;
-    }
-    const auto effects = criteria  ? parts.of_criteria(*node)
-                         : options ? parts.of_options(*node, items)
-                                   : parts.of_grades(*node);
+    const auto effects = effects_of(parts, *node, kind, items);
     const auto rest = parts.rest(*node);
-    OpenLeads leads{
-        std::move(*set), {{}, effects.part, effects.largest}, {}, std::move(who), std::move(turned)};
+    const double weight = parts.weight(node->id);
     const std::size_t first = *results.first;
     for (std::size_t o = 0; o < results.options.size(); ++o) {
         if (o == first) continue;
-        Lead lead{rest[first] - rest[o], {}};
+        Lead lead{rest[first] - rest[o], {}, effects.part, effects.largest};
         for (std::size_t i = 0; i < items.size(); ++i)
-            lead.effect.push_back(effects.values[first][i] - effects.values[o][i]);
-        leads.question.leads.push_back(std::move(lead));
-        leads.rivals.push_back(results.options[o]);
+            lead.effect.push_back(weight * (effects.values[first][i] - effects.values[o][i]));
+        leads.leads.push_back(std::move(lead));
     }
-    for (auto& guard : guards(decision, results, *node, musts))
-        leads.question.leads.push_back(std::move(guard));
+    leads.leads.insert(leads.leads.end(), std::make_move_iterator(more->begin()),
+                       std::make_move_iterator(more->end()));
     finding.leads = std::move(leads);
     return finding;
 }

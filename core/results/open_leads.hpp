@@ -19,14 +19,13 @@ struct OpenPairs {
     std::vector<std::array<Id, 2>> pairs;
 };
 
-/// The leads of the option in first place over each other one, as they hang on the answers to open pairs.
+/// The leads of the option in first place as they hang on the answers to open pairs.
 struct OpenLeads {
     OpenSet set;
-    /// A lead over each of `rivals`, in their order. After them leads that keep every option on its side of
+    /// Over each other option in play, in their order. After them leads that keep every option on its side of
     /// the musts on a node's worth that hang on the set: while they stay above 0 the same options are in
     /// play.
-    LeadQuestion question;
-    std::vector<Id> rivals;       ///< The other options in play.
+    std::vector<Lead> leads;
     std::vector<std::size_t> who; ///< Per answer of the set: which of the open pairs it is...
     std::vector<bool> turned;     ///< ...and whether that pair is named the other way round.
 };

@@ -16,8 +16,12 @@ ScoreParts::ScoreParts(const Decision& decision, const Results& results) : d_(de
     for (const auto& leaf : results.leaves) leaf_[leaf.leaf] = &leaf;
 }
 
-std::vector<std::vector<double>> ScoreParts::nothing(std::size_t items) const {
-    return {r_.options.size(), std::vector<double>(items, 0.0)};
+ScoreParts::Effects ScoreParts::no_effects(std::size_t items) const {
+    const std::size_t m = r_.options.size();
+    return {{m, std::vector<double>(items, 0.0)},
+            std::vector<double>(items, 0.0),
+            false,
+            std::vector<bool>(m, false)};
 }
 
 std::vector<double> ScoreParts::rest(const Node& node) const {
@@ -61,58 +65,54 @@ bool ScoreParts::weighed(const Node& node, const Id& except) const {
                        [&](const Node& child) { return weighed(child, except); });
 }
 
-ScoreParts::Effects ScoreParts::of_criteria(const Node& node) const {
+ScoreParts::Effects ScoreParts::of_criteria(const Node& node, std::optional<double> missing_as) const {
     const std::size_t n = node.children.size();
-    Effects effects{nothing(n), std::vector<double>(n, 1.0), false};
-    const double w = weight(node.id);
+    Effects effects = no_effects(n);
+    effects.part.assign(n, 1.0);
     for (std::size_t i = 0; i < n; ++i) {
-        const auto of_child = value(node.children[i]);
-        for (std::size_t o = 0; o < of_child.size(); ++o) effects.values[o][i] = w * of_child[o];
+        const auto of_child = value(node.children[i], missing_as);
+        for (std::size_t o = 0; o < of_child.size(); ++o) effects.values[o][i] = of_child[o];
     }
     return effects;
 }
 
-ScoreParts::Effects ScoreParts::of_options(const Node& leaf, const std::vector<Id>& items) const {
-    Effects effects{nothing(items.size()), std::vector<double>(items.size(), 0.0),
-                    r_.settings.synthesis == Synthesis::ideal};
+ScoreParts::Effects ScoreParts::of_options(const std::vector<Id>& items) const {
+    Effects effects = no_effects(items.size());
+    effects.largest = r_.settings.synthesis == Synthesis::ideal;
     for (std::size_t o = 0; o < r_.options.size(); ++o) {
         const auto at = std::find(items.begin(), items.end(), r_.options[o]) - items.begin();
-        effects.values[o][static_cast<std::size_t>(at)] = weight(leaf.id);
+        effects.values[o][static_cast<std::size_t>(at)] = 1;
         effects.part[static_cast<std::size_t>(at)] = 1;
     }
     return effects;
 }
 
-/// Worths of grades are their weights over the largest, an option's worth is linear in them. Options without
-/// a grade take the mean of the others' local values.
 ScoreParts::Effects ScoreParts::of_grades(const Node& leaf) const {
     const std::size_t n = leaf.grades.size();
-    const bool ideal = r_.settings.synthesis == Synthesis::ideal;
-    Effects effects{nothing(n), std::vector<double>(n, ideal ? 1.0 : 0.0), ideal};
+    Effects effects = no_effects(n);
+    effects.largest = r_.settings.synthesis == Synthesis::ideal;
     const ByPlace<GradeEntry> entries(d_.grades);
-    std::vector<bool> given(r_.options.size(), false);
     std::vector<double> sum(n, 0.0);
     double known = 0;
     for (std::size_t o = 0; o < r_.options.size(); ++o) {
         for (std::size_t g = 0; g < n; ++g) {
+            // An option's worth is linear in those of the grades: each alone gives its coefficient.
             std::vector<std::optional<double>> one(n, 0.0);
             one[g] = 1;
             const auto finding =
                 find_grade_worth(d_.people, leaf, r_.options[o], entries.at(leaf.id, r_.options[o]), one);
-            given[o] = finding.given;
+            effects.missing[o] = !finding.given;
             effects.values[o][g] = finding.worth.value_or(0);
             sum[g] += effects.values[o][g];
         }
-        known += given[o] ? 1 : 0;
+        known += effects.missing[o] ? 0 : 1;
     }
-    if (!ideal && known > 0) effects.part = sum;
-    if (known == 0) effects.part.assign(n, 1.0); // All alike: nothing hangs on the set.
+    // Where nobody has a grade all are alike, and nothing hangs on the set.
+    effects.part.assign(n, 1.0);
+    if (!effects.largest && known > 0) effects.part = sum;
     for (std::size_t o = 0; o < r_.options.size(); ++o) {
-        for (std::size_t g = 0; g < n; ++g) {
-            double& value = effects.values[o][g];
-            if (!given[o]) value = known > 0 ? sum[g] / known : 0;
-            value *= weight(leaf.id);
-        }
+        for (std::size_t g = 0; g < n && effects.missing[o] && known > 0; ++g)
+            effects.values[o][g] = sum[g] / known;
     }
     return effects;
 }

@@ -30,24 +30,26 @@ public:
     /// Whether every set of criteria at or below the node but `except` has weights.
     bool weighed(const Node& node, const Id& except) const;
 
-    /// What hangs on a set: an option's score is its rest + sum_i values[option][i] w_i / divisor, w the
-    /// weights of the set's items, the divisor as in LeadQuestion.
+    /// How the options' values on a node hang on the weights w of its set once it has them: (sum_i
+    /// values[option][i] w_i) / divisor, `part` and `largest` as in Lead.
     struct Effects {
         std::vector<std::vector<double>> values;
         std::vector<double> part;
         bool largest = false;
+        std::vector<bool>
+            missing; ///< Per option: it has no value here even then; `values` are a placeholder.
     };
-    Effects of_criteria(const Node& node) const;
+    Effects of_criteria(const Node& node, std::optional<double> missing_as = {}) const;
 
     /// `items`: the options in play, or more.
-    Effects of_options(const Node& leaf, const std::vector<Id>& items) const;
+    Effects of_options(const std::vector<Id>& items) const;
 
     /// Worths of grades are their weights over the largest; an option's worth is linear in them. Options
     /// without a grade take the mean of the others' local values.
     Effects of_grades(const Node& leaf) const;
 
 private:
-    std::vector<std::vector<double>> nothing(std::size_t items) const;
+    Effects no_effects(std::size_t items) const;
 
     const Decision& d_;
     const Results& r_;

@@ -79,18 +79,17 @@ std::vector<double> weights_of(Method method, const Rows& a) {
 
 } // namespace
 
-LeadQuestion OpenCase::question() const {
-    LeadQuestion question;
-    question.part.assign(items, 1.0);
-    question.largest = kind == OpenKind::options_ideal || kind == OpenKind::grades_ideal;
+std::vector<Lead> OpenCase::leads() const {
+    std::vector<Lead> leads;
+    const bool largest = kind == OpenKind::options_ideal || kind == OpenKind::grades_ideal;
     for (std::size_t o = 0; o < rest.size(); ++o) {
         if (o == leader) continue;
-        Lead lead{rest[leader] - rest[o], {}};
+        Lead lead{rest[leader] - rest[o], {}, std::vector<double>(items, 1.0), largest};
         for (std::size_t i = 0; i < items; ++i)
             lead.effect.push_back(weight * (values[leader][i] - values[o][i]));
-        question.leads.push_back(std::move(lead));
+        leads.push_back(std::move(lead));
     }
-    return question;
+    return leads;
 }
 
 std::vector<double> OpenCase::weights(const std::vector<double>& answers) const {

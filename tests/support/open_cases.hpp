@@ -27,7 +27,7 @@ struct OpenCase {
     std::size_t leader = 0;
 
     OpenSet set() const { return {method, arithmetic, judges, ranges}; }
-    LeadQuestion question() const;
+    std::vector<Lead> leads() const;
 
     /// The weights and the options' scores with these answers, by code that shares nothing with the solver
     /// where all pairs are judged in the end.

@@ -18,7 +18,7 @@ using namespace steelyard::testing;
 namespace {
 
 LeadSearch run(const OpenCase& open) {
-    LeadSearch search(open.set(), open.question());
+    LeadSearch search(open.set(), open.leads());
     double progress = 0;
     while (search.step()) {
         CHECK(search.progress() >= progress);
@@ -69,9 +69,8 @@ std::map<LeadState, int> attack(Method method, std::size_t sets, std::size_t mos
         }
         CHECK(open.behind(search.answers()) > .99e-9);
         // The lead it names is among those turned.
-        const auto question = open.question();
-        CHECK(lead_value(question, question.leads[search.lost_lead()], open.weights(search.answers())) <
-              -.99e-9);
+        const auto leads = open.leads();
+        CHECK(lead_value(leads[search.lost_lead()], open.weights(search.answers())) < -.99e-9);
     }
     return count;
 }
@@ -133,9 +132,9 @@ TEST_CASE("lead search: two items, the answer that turns the lead lies where the
     // Scores 1 * w1 + 0 * w2 against 0 * w1 + 1 * w2: the lead turns at ratio 1. Known from the ranges alone.
     for (const Method method : {Method::geometric_mean, Method::eigenvector}) {
         const auto state = [&](double low, double high) {
-            LeadQuestion question{{{0, {1, -1}}}, {1, 1}, false};
+            const std::vector<Lead> leads{{0, {1, -1}, {1, 1}, false}};
             LeadSearch search(OpenSet(method, false, {one_judge(PairMatrix(2), {{0, 1}})}, {{low, high}}),
-                              question);
+                              leads);
             while (search.step()) {
             }
             return search.state();
@@ -162,9 +161,9 @@ TEST_CASE("lead search: three items with one open pair, against the formula") {
     for (const double rest : {.2, .3, .4, .45, .5, .55, .6, .65, .7}) {
         double least = 1;
         for (int k = 0; k <= 10000; ++k) least = std::min(least, lead(std::pow(9.0, k / 5000.0 - 1), rest));
-        LeadQuestion question{{{rest, {-1, 0, 1}}}, {1, 1, 1}, false};
+        const std::vector<Lead> leads{{rest, {-1, 0, 1}, {1, 1, 1}, false}};
         LeadSearch search(
-            OpenSet(Method::geometric_mean, false, {one_judge(known, {{1, 2}})}, {AnswerRange{}}), question);
+            OpenSet(Method::geometric_mean, false, {one_judge(known, {{1, 2}})}, {AnswerRange{}}), leads);
         while (search.step()) {
         }
         CAPTURE(rest, least);
@@ -176,8 +175,9 @@ TEST_CASE("lead search: without open answers the present lead decides") {
     const PairMatrix known = house_pairs();
     const Weights w = *weights_by(Method::eigenvector, known);
     for (const double rest : {-1.0, -.1, .1, 1.0}) {
-        LeadQuestion question{{{rest, std::vector<double>(8, 0.0)}}, std::vector<double>(8, 1.0), false};
-        LeadSearch search(OpenSet(Method::eigenvector, false, {one_judge(known, {})}, {}), question);
+        const std::vector<Lead> leads{
+            {rest, std::vector<double>(8, 0.0), std::vector<double>(8, 1.0), false}};
+        LeadSearch search(OpenSet(Method::eigenvector, false, {one_judge(known, {})}, {}), leads);
         while (search.step()) {
         }
         CHECK(search.state() == (rest > 0 ? LeadState::kept : LeadState::lost));

@@ -383,21 +383,57 @@ TEST_CASE(
     CHECK_FALSE(turned_by_trying(decision, results, "goal", "", open, 200, 1));
 }
 
-TEST_CASE("enough: a must above a judged leaf is only tried out") {
-    const auto decision = [](const char* must) {
+TEST_CASE("enough: a must above a judged leaf") {
+    const auto decision = [](const char* must, const char* synthesis) {
         return test::read(
             std::string(R"({"format": "steelyard-decision", "version": 1,
             "options": [{"id": "o1"}, {"id": "o2"}, {"id": "o3"}], "criteria": {"id": "goal"},
+            "settings": {"synthesis": ")") +
+            synthesis + R"("}, "requirements": [{"id": "r1", "node": "goal", )" + must + "}], " +
+            judgments({judgment("goal", "", "o1", "o2", "5"), judgment("goal", "", "o1", "o3", "5")}) + "}");
+    };
+    for (const char* synthesis : {"ideal", "distributive"}) {
+        CAPTURE(synthesis);
+        // Worths of the others go from about .1 to .42; o1 is the best, 1, whatever is said of them.
+        const Decision kept = decision(R"("min_worth": 0.02)", synthesis);
+        CHECK(checked(kept, solve(kept), "goal", "", {{"o2", "o3"}}, 200, 1) == Verdict::proven_no);
+        const Decision turned = decision(R"("at_least": 0.1)", synthesis);
+        CHECK(checked(turned, solve(turned), "goal", "", {{"o1", "o2"}, {"o1", "o3"}}, 50, 1) ==
+              Verdict::found_yes);
+        // The others can come in or go out, which moves nobody to first place.
+        const Decision others = decision(R"("min_worth": 0.15)", synthesis);
+        REQUIRE(solve(others).options.size() == 3);
+        const EnoughAnswer answer = asked(others, "", {{"o2", "o3"}});
+        CHECK(answer.verdict == Verdict::not_known);
+        CHECK(answer.why.find("must") != std::string::npos);
+        // One that fails already is judged among the field, the others among those in play: only tried out.
+        const Decision out = decision(R"("min_worth": 0.9)", synthesis);
+        REQUIRE(solve(out).options.size() == 1);
+        CHECK(checked(out, solve(out), "goal", "", {{"o2", "o3"}}, 50, 1) == Verdict::not_known);
+        CHECK(checked(out, solve(out), "goal", "", {{"o1", "o3"}, {"o1", "o2"}}, 50, 1) ==
+              Verdict::found_yes);
+    }
+}
+
+TEST_CASE("enough: a must above grades judged in pairs") {
+    const auto decision = [](const char* must) {
+        return test::read(
+            std::string(R"({"format": "steelyard-decision", "version": 1,
+            "options": [{"id": "o1"}, {"id": "o2"}, {"id": "o3"}],
+            "criteria": {"id": "goal", "rate": "grade", "worths": "pairs",
+                "grades": [{"id": "g1"}, {"id": "g2"}, {"id": "g3"}]},
+            "grades": [{"criterion": "goal", "option": "o1", "grade": "g1"},
+                       {"criterion": "goal", "option": "o2", "grade": "g2"}],
             "requirements": [{"id": "r1", "node": "goal", )") +
             must + "}], " +
-            judgments({judgment("goal", "", "o1", "o2", "9"), judgment("goal", "", "o1", "o3", "9")}) + "}");
+            judgments({judgment("goal", "", "g1", "g2", "4"), judgment("goal", "", "g1", "g3", "4")}) + "}");
     };
-    const Decision kept = decision(R"("min_worth": 0.001)");
-    const EnoughAnswer answer = asked(kept, "", {{"o2", "o3"}});
-    CHECK(answer.verdict == Verdict::not_known);
-    CHECK(answer.why.find("must") != std::string::npos);
-    const Decision turned = decision(R"("at_least": 0.5)");
-    CHECK(checked(turned, solve(turned), "goal", "", {{"o1", "o2"}, {"o1", "o3"}}, 50, 1) ==
+    // o3 has no grade: between 0 and 1, undecided, it stays; o2 lies from .1 to .5.
+    const Decision kept = decision(R"("min_worth": 0.05)");
+    CHECK(checked(kept, solve(kept), "goal", "", {{"g2", "g3"}}, 200, 1) == Verdict::proven_no);
+    const Decision turned = decision(R"("at_most": 1, "min_worth": 0.5)");
+    REQUIRE(first_of(solve(turned)) == "o1");
+    CHECK(checked(turned, solve(turned), "goal", "", {{"g1", "g2"}, {"g2", "g3"}}, 50, 1) ==
           Verdict::found_yes);
 }
 
