@@ -92,7 +92,9 @@ private:
 
     OpenJudge of_group(const JudgedSet& judged) const {
         OpenJudge open{1, group_matrix(judged), {}};
-        for (const auto& [i, j] : open.known.judged_pairs()) {
+        for (const auto& pair : open.known.judged_pairs()) {
+            const std::size_t i = pair[0];
+            const std::size_t j = pair[1];
             const auto place = [&](std::size_t answer, double factor, double fixed) {
                 open.known.clear(i, j);
                 open.open.push_back({i, j, answer, factor, fixed});
