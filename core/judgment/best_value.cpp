@@ -159,7 +159,8 @@ std::optional<BestValue> BestValues::of(std::size_t i, std::size_t j) {
     PairMatrix rest = pairs_;
     rest.clear(i, j);
     if (!rest.connected()) return std::nullopt;
-    const Completion without = complete_optimally(rest, &whole_.principal);
+    // Started from the whole set's vectors it would not end sooner: they have the pair's own error in them.
+    const Completion without = complete_optimally(rest);
     const VectorXd& w = without.principal.right;
     return BestValue{without.matrix(p, q), without.principal.lambda, w(p) / w(q)};
 }
@@ -167,7 +168,7 @@ std::optional<BestValue> BestValues::of(std::size_t i, std::size_t j) {
 double BestValues::lambda_at(std::size_t i, std::size_t j, double ratio) const {
     PairMatrix changed = pairs_;
     changed.set(i, j, ratio);
-    return complete_optimally(changed, &whole_.principal).principal.lambda;
+    return complete_optimally(changed).principal.lambda;
 }
 
 double nearest_on_scale(double ratio) {

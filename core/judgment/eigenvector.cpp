@@ -79,7 +79,7 @@ PrincipalPair principal_eigenvector(const MatrixXd& a, const PrincipalPair* star
     return p;
 }
 
-Completion complete_optimally(const PairMatrix& pairs, const PrincipalPair* start) {
+Completion complete_optimally(const PairMatrix& pairs) {
     const auto n = static_cast<Index>(pairs.size());
     MatrixXd a(n, n);
     for (Index i = 0; i < n; ++i) {
@@ -88,13 +88,12 @@ Completion complete_optimally(const PairMatrix& pairs, const PrincipalPair* star
     }
     const FreePairs free{pairs.missing(), {}};
     if (free.missing.empty()) {
-        PrincipalPair p = principal_eigenvector(a, start);
+        PrincipalPair p = principal_eigenvector(a);
         return {std::move(a), std::move(p)};
     }
     assert(pairs.connected());
     // The geometric mean's answer is near; it is exact where the judged pairs are consistent.
-    return least_lambda(std::move(a), free, start != nullptr ? potentials(*start) : log_least_squares(pairs),
-                        {}, start);
+    return least_lambda(std::move(a), free, log_least_squares(pairs));
 }
 
 } // namespace steelyard

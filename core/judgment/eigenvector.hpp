@@ -27,9 +27,9 @@ struct Completion {
 
 /// Fills the missing pairs of a connected matrix with the values that minimise lambda max, by Newton's method
 /// in the logarithms of the missing entries, in which lambda max is convex. A complete matrix is taken as it
-/// is. `start`: the vectors of a completion of nearly the same pairs, which saves steps. Source: Bozoki,
-/// Fulop, Ronyai, On optimal completion of incomplete pairwise comparison matrices, Mathematical and Computer
-/// Modelling 52 (2010) 318-333; derivatives of the eigenvalue by perturbation theory.
-Completion complete_optimally(const PairMatrix& pairs, const PrincipalPair* start = nullptr);
+/// is. Source: Bozoki, Fulop, Ronyai, On optimal completion of incomplete pairwise comparison matrices,
+/// Mathematical and Computer Modelling 52 (2010) 318-333; derivatives of the eigenvalue by perturbation
+/// theory.
+Completion complete_optimally(const PairMatrix& pairs);
 
 } // namespace steelyard
