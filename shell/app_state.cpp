@@ -229,7 +229,8 @@ void App::State::apply(Actions::Step step) {
         asked = AskedStep{std::move(step), sentence(applied.losses)};
         return;
     }
-    const Stamp when = stamp();
+    Stamp when = stamp();
+    when.why = std::move(step.why);
     for (auto& edit : step.edits) set_time(edit, when.at);
     const auto outcome = session.apply(step.edits, when, std::move(step.label));
     if (!outcome.problems.empty()) message = sentence(outcome.problems.front());
