@@ -137,6 +137,10 @@ private:
             points_.draw(ui, view, actions, entry, area);
             return;
         }
+        if (grid_.large()) {
+            if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, area)) pair_ = *pair;
+            return;
+        }
         Box arm = area.take_top(std::clamp(area.h * 0.52f, 300.0f, 420.0f), 12);
         draw_arm_card(ui, view, actions, entry, arm);
         Box below = area;
@@ -150,7 +154,7 @@ private:
             grid = below.take_left(std::clamp(side, below.w * 0.42f, below.w * 0.52f), 12);
             words = below;
         }
-        if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, grid)) pick(ui, *pair);
+        if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, grid)) pair_ = *pair;
         if (const auto pair = hold_.draw(ui, view, actions, entry, words)) pick(ui, *pair);
     }
 
