@@ -86,13 +86,13 @@ std::optional<ItemPair> PairGrid::draw(Ui& ui, const RoomView& view, Actions& ac
 }
 
 void PairGrid::draw_head(Ui& ui, const RoomView& view, Actions& actions, const PairTable& table, Box head) {
-    const auto link = [&](const char* id, const char* label, bool enabled = true) {
-        const Box box = head.take_right(button_width(label, ButtonKind::link), 6);
-        return button(ui, id, label, {box.x, box.y, box.w, text_button}, ButtonKind::link, enabled);
+    const auto act = [&](const char* id, const char* label, bool enabled = true) {
+        const Box box = head.take_right(button_width(label, ButtonKind::link) + 4, 2);
+        return button(ui, id, label, {box.x, box.y, box.w, text_button}, ButtonKind::quiet, enabled);
     };
-    if (link("grid-large", large_ ? "Smaller" : "Larger")) large_ = !large_;
-    if (link("grid-paste", "Paste", !view.read_only)) paste_.open({}, set_, view.person);
-    if (link("grid-copy", "Copy")) copy_matrix(actions, table);
+    if (act("grid-large", large_ ? "Smaller" : "Larger")) large_ = !large_;
+    if (act("grid-paste", "Paste", !view.read_only)) paste_.open({}, set_, view.person);
+    if (act("grid-copy", "Copy")) copy_matrix(actions, table);
     const char* title = "All pairs of this set";
     const char* brief = "All pairs";
     draw_text(ui, {head.x, head.y + 4}, text_size(Font::strong, title).x <= head.w ? title : brief,
