@@ -30,7 +30,8 @@ bool PairGrid::paste(const std::string& text, const RoomView& view, Actions& act
     if (!entry || view.read_only) return false;
     const MatrixPlan plan = plan_matrix(view, *entry, text, false);
     paste_.open(text, set, view.person);
-    if (!plan.problem.empty()) actions.say("Nothing was changed. " + plan.problem);
+    actions.say(plan.problem.empty() ? "Pasted, not entered yet: " + plan.words
+                                     : "Nothing was changed. " + plan.problem);
     return true;
 }
 

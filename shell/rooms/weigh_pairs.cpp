@@ -127,15 +127,13 @@ void PairTable::mark_misfits() {
 }
 
 void PairTable::mark_circles() {
-    const auto mark = [&](const std::array<Id, 3>& circle, std::vector<Id> PairCell::*list) {
+    for (const auto& circle : entry_.cycles) {
         for (std::size_t k = 0; k < 3; ++k) {
             const auto i = place(circle[k]);
             const auto j = place(circle[(k + 1) % 3]);
-            if (i && j) (cell(std::min(*i, *j), std::max(*i, *j)).*list).push_back(circle[(k + 2) % 3]);
+            if (i && j) cell(std::min(*i, *j), std::max(*i, *j)).circles.push_back(circle[(k + 2) % 3]);
         }
-    };
-    for (const auto& circle : entry_.cycles) mark(circle, &PairCell::circles);
-    for (const auto& circle : entry_.tied_cycles) mark(circle, &PairCell::tied_circles);
+    }
 }
 
 std::optional<double> PairTable::ratio(std::size_t i, std::size_t j) const {
@@ -204,6 +202,15 @@ std::string PairTable::sentences(std::size_t i, std::size_t j) const {
     std::string out;
     const auto add = [&](const std::string& more) { out += (out.empty() ? "" : " ") + more; };
     if (c.ratio) add(sentence(*c.ratio) + ".");
+    if (c.off != PairOff::none && c.implied) {
+        add(std::string(c.off == PairOff::far ? "Far off" : "A little off") + ": the other answers say " +
+            sentence(*c.implied) + ".");
+    }
+    if (!c.circles.empty()) {
+        std::vector<std::string> names;
+        for (const auto& id : c.circles) names.push_back(item_name(d, entry_.set, id));
+        add("Runs in a circle with " + listed(names) + ".");
+    }
     switch (c.source) {
     case PairSource::missing: add(names_[i] + " against " + names_[j] + ": not answered."); break;
     case PairSource::abstained: add(why_not(i, j)); break;
@@ -223,18 +230,6 @@ std::string PairTable::sentences(std::size_t i, std::size_t j) const {
         break;
     }
     }
-    if (c.off != PairOff::none && c.implied) {
-        add(std::string(c.off == PairOff::far ? "Far off" : "A little off") + ": the other answers say " +
-            sentence(*c.implied) + ".");
-    }
-    const auto circle = [&](const std::vector<Id>& thirds, const char* opening) {
-        if (thirds.empty()) return;
-        std::vector<std::string> names;
-        for (const auto& id : thirds) names.push_back(item_name(d, entry_.set, id));
-        add(opening + listed(names) + ".");
-    };
-    circle(c.circles, "Runs in a circle with ");
-    circle(c.tied_circles, "Runs in a circle, with a tie, with ");
     if (!c.ranges.empty()) add(c.ranges);
     return out;
 }

@@ -33,7 +33,6 @@ struct PairCell {
     PairOff off = PairOff::none;
     std::optional<double> implied; ///< What the other answers say.
     std::vector<Id> circles;       ///< The third item of each circle the pair is part of.
-    std::vector<Id> tied_circles;  ///< The same for circles with a tie.
     std::string ranges;            ///< That it was judged on other ranges, and which; empty where it was not.
 
     /// The answers of several judges, or of one of them, are not to be changed for the group.
