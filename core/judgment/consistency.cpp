@@ -65,12 +65,6 @@ std::optional<double> geometric_consistency_index(const PairMatrix& pairs) {
     return index < rounding * rounding ? 0 : index; // Squares of rounding.
 }
 
-std::optional<double> geometric_consistency_limit(std::size_t n, double cr_limit) {
-    if (n < 3) return std::nullopt;
-    const double at_tenth = n == 3 ? .31 : n == 4 ? .35 : .37;
-    return at_tenth * cr_limit / .10;
-}
-
 std::optional<WorstTriad> koczkodaj_index(const PairMatrix& pairs) {
     std::optional<WorstTriad> worst;
     each_triad(pairs, [&](std::size_t i, std::size_t j, std::size_t k) {

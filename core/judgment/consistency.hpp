@@ -22,10 +22,6 @@ double lambda_by_hand(const Eigen::MatrixXd& matrix, const Weights& weights);
 /// none. Source: Aguaron and Moreno-Jimenez, EJOR 147 (2003) 137-145, from memory.
 std::optional<double> geometric_consistency_index(const PairMatrix& pairs);
 
-/// The GCI that belongs to a limit of CR, for n >= 3: .31 for n = 3, .35 for n = 4, .37 above at CR .10, and
-/// in proportion for other limits. None for n < 3. Source: the same paper, from memory.
-std::optional<double> geometric_consistency_limit(std::size_t n, double cr_limit);
-
 struct WorstTriad {
     double index = 0;
     Triad triad{};

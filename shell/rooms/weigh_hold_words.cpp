@@ -4,7 +4,7 @@
 #include <cstdio>
 
 #include "core/decision/lookup.hpp"
-#include "core/judgment/consistency.hpp"
+#include "core/judgment/consistency_limit.hpp"
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_pairs.hpp"
 

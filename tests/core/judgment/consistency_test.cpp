@@ -68,16 +68,6 @@ TEST_CASE("geometric consistency index: none below three items or with a pair mi
     CHECK_FALSE(geometric_consistency_index(upper_triangle(3, {2, 0, 2})).has_value());
 }
 
-// Aguaron and Moreno-Jimenez, EJOR 147 (2003) 137-145, from memory.
-TEST_CASE("geometric consistency limit: .31, .35 and .37 at a ratio of .10, in proportion else") {
-    CHECK_THAT(geometric_consistency_limit(3, .10).value(), WithinAbs(.31, 1e-15));
-    CHECK_THAT(geometric_consistency_limit(4, .10).value(), WithinAbs(.35, 1e-15));
-    CHECK_THAT(geometric_consistency_limit(5, .10).value(), WithinAbs(.37, 1e-15));
-    CHECK_THAT(geometric_consistency_limit(15, .10).value(), WithinAbs(.37, 1e-15));
-    CHECK_THAT(geometric_consistency_limit(8, .05).value(), WithinAbs(.185, 1e-15));
-    CHECK_FALSE(geometric_consistency_limit(2, .10).has_value());
-}
-
 TEST_CASE("worst triad: a factor of two either way gives one half") {
     for (const double ratio : {8., 2.}) {
         const WorstTriad worst = koczkodaj_index(upper_triangle(3, {2, ratio, 2})).value();
