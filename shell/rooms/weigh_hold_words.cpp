@@ -7,6 +7,7 @@
 #include "core/judgment/consistency_limit.hpp"
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_pairs.hpp"
+#include "shell/words.hpp"
 
 namespace steelyard {
 namespace {
@@ -70,7 +71,7 @@ HoldTerm index_term(const SetResult& entry) {
 HoldTerm random_term(const Decision& d, const SetResult& entry) {
     const std::string name = "Random index RI";
     if (!entry.ri) return {name, dash, no_ratio(d, entry)};
-    return {name, decimals_text(*entry.ri, 3),
+    return {name, figure_text(*entry.ri, 4),
             "The CI that answers at random give on average, from the table of " +
                 table_name(d.settings.random_index) +
                 (entry.missing.empty() ? "." : ", lowered for the pairs missing.")};

@@ -2,6 +2,9 @@
 #include <filesystem>
 
 #include "core/decision/write.hpp"
+#include "shell/rooms/weigh_answers.hpp"
+#include "shell/rooms/weigh_hold.hpp"
+#include "tests/shell/support/card_page.hpp"
 #include "tests/shell/support/headless.hpp"
 #include "tests/shell/support/judged_set.hpp"
 #include "tests/shell/support/ledger_checks.hpp"
@@ -101,5 +104,44 @@ TEST_CASE("the grid in the dark, on a large page, and a matrix on its way in") {
         page.paste(
             "1\t3\t5\t\t\t\n\t1\t1\t2\t3\t0,33\n\t\t1\t\t\t4\n\t\t\t1\t1\t1\n\t\t\t\t1\t1\n\t\t\t\t\t1");
         look(page, "paste", size, dark);
+    }
+}
+
+TEST_CASE("what can be corrected, in a narrow card and in a wide one, to the end of what it says") {
+    for (const bool dark : {false, true}) {
+        for (const int width : {300, 560}) {
+            HoldCard hold;
+            CardPage page(contradicting_set(),
+                          [&](Ui& ui, const RoomView& view, Actions& actions, Box box) {
+                              hold.draw(ui, view, actions, own_entry(view, "goal"), box);
+                          },
+                          {.width = width, .height = width == 300 ? 1700 : 1400, .dark = dark});
+            const std::string folder = std::string(STEELYARD_SOURCE_DIR) + "/build/pictures";
+            const auto picture = [&](const std::string& name) {
+                page.save_png(folder + "/hold-" + name + "-" + std::to_string(width) + (dark ? "-dark" : "") +
+                              ".png");
+                INFO(name << " " << width);
+                CHECK(page.faults() == std::vector<std::string>{});
+            };
+            picture("waiting");
+            Examination found;
+            found.set = "goal";
+            found.finished = true;
+            PairCorrection worst{.a = "c1", .b = "c3", .given = 1.0 / 6, .implied = 2};
+            worst.choices = {{1, .12, {"brook", 3.1}}, {2, .03, {"alder", 0.4}}, {3, .05, {"brook", 0.2}}};
+            found.pairs = {worst, {.a = "c0", .b = "c2", .given = 4, .implied = 1.5}};
+            found.fewest = FewestCorrections{
+                false, {{"c1", "c3", "", 1.0 / 6, 2}, {"c0", "c2", "", 4, 3}}, .02, {"brook", 2.8}};
+            found.matters_worst = MattersAnswer{.matters = Matters::proven_no, .pairs = {{"c1", "c3"}}};
+            found.matters_fewest = MattersAnswer{.matters = Matters::found_yes,
+                                                 .answers = {{"c1", "c3", 9}, {"c0", "c2", 5}},
+                                                 .first_then = "alder"};
+            page.examination = found;
+            page.frame(3);
+            page.click("Floor space 2 times Noise", "radio");
+            page.click("By the other methods too", "button");
+            page.click("Change these settings", "button");
+            picture("corrections");
+        }
     }
 }
