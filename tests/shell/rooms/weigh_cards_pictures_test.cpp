@@ -115,7 +115,7 @@ TEST_CASE("what can be corrected, in a narrow card and in a wide one, to the end
                           [&](Ui& ui, const RoomView& view, Actions& actions, Box box) {
                               hold.draw(ui, view, actions, own_entry(view, "goal"), box);
                           },
-                          {.width = width, .height = width == 300 ? 1700 : 1400, .dark = dark});
+                          {.width = width, .height = width == 300 ? 2500 : 1900, .dark = dark});
             const std::string folder = std::string(STEELYARD_SOURCE_DIR) + "/build/pictures";
             const auto picture = [&](const std::string& name) {
                 page.save_png(folder + "/hold-" + name + "-" + std::to_string(width) + (dark ? "-dark" : "") +
