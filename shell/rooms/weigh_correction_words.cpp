@@ -76,15 +76,17 @@ std::string matters_sentence(const RoomView& view, const Id& set, const MattersA
     switch (matters.matters) {
     case Matters::proven_no: return corrected + option_name(view.decision, first) + " stays first.";
     case Matters::not_known:
-        return "Whether another answer here could change first place is not known" +
+        return std::string(several ? "Whether other answers" : "Whether another answer") +
+               " here could change first place is not known" +
                (matters.why.empty() ? "." : ": " + matters.why);
     case Matters::found_yes: break;
     }
     std::vector<std::string> with;
     for (const auto& answer : matters.answers)
         with.push_back(brief_pair(view.decision, set, answer.a, answer.b, answer.ratio));
-    return "It matters who is right: with " + listed(with, with.size()) + ", " +
-           option_name(view.decision, matters.first_then) + " would be first.";
+    return std::string(several ? "Together they matter: with " : "It matters who is right: with ") +
+           listed(with, with.size()) + ", " + option_name(view.decision, matters.first_then) +
+           " would be first.";
 }
 
 std::string fewest_sentence(const FewestCorrections& fewest) {

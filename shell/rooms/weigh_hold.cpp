@@ -69,7 +69,7 @@ void HoldCard::draw_weights(Ui& ui, const RoomView& view, const SetResult& entry
     }
     const char* label = all_methods_ ? "Only the chosen method" : "By the other methods too";
     const Box row = flow.next(30, 4);
-    if (button(ui, "all-methods", label, {row.x, row.y, button_width(label, ButtonKind::link) + 4, 28},
+    if (button(ui, "all-methods", label, {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28},
                ButtonKind::quiet))
         all_methods_ = !all_methods_;
     if (!all_methods_) return;
@@ -80,20 +80,25 @@ void HoldCard::draw_weights(Ui& ui, const RoomView& view, const SetResult& entry
     const Column columns[] = {{"eigenvector", &entry.eigenvector},
                               {"geometric", &entry.geometric_mean},
                               {"columns", &entry.column_average}};
-    constexpr float column_width = 76;
+    constexpr float column_width = 78;
+    // In a narrow card the names stand above their figures.
+    const bool narrow = flow.width() < 3 * column_width + 90;
+    const auto at = [&](const Box& line, int k) {
+        return narrow ? line.x + line.w * static_cast<float>(k + 1) / 3
+                      : line.right() - column_width * static_cast<float>(2 - k);
+    };
     const Box head = flow.next(20, 0);
-    for (int k = 0; k < 3; ++k) {
-        draw_text(ui, {head.right() - column_width * static_cast<float>(2 - k), head.y}, columns[k].name,
+    for (int k = 0; k < 3; ++k)
+        draw_text(ui, {at(head, k), head.y}, columns[k].name,
                   {.font = Font::small, .ink = theme.quiet, .align = Align::right});
-    }
     for (std::size_t i = 0; i < entry.items.size(); ++i) {
-        const Box line = flow.next(22, 0);
+        Box line = flow.next(22, 0);
         draw_text(ui, line.at(), item_name(d, entry.set, entry.items[i]),
-                  {.font = Font::small, .max_width = line.w - 3 * column_width - 4});
+                  {.font = Font::small, .max_width = narrow ? line.w : line.w - 3 * column_width - 4});
+        if (narrow) line = flow.next(20, 2);
         for (int k = 0; k < 3; ++k) {
             const auto& weights = *columns[k].weights;
-            draw_text(ui, {line.right() - column_width * static_cast<float>(2 - k), line.y},
-                      weights ? percent_text((*weights)[i]) : "\xE2\x80\x94",
+            draw_text(ui, {at(line, k), line.y}, weights ? percent_text((*weights)[i]) : "\xE2\x80\x94",
                       {.font = Font::small, .align = Align::right});
         }
     }
@@ -107,9 +112,11 @@ void HoldCard::draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, 
     flow.space(6);
     flow.say("The figures of the trade", Font::strong, theme.quiet);
     for (const auto& term : hold_terms(view.decision, entry)) {
-        const Box line = flow.next(line_step(Font::body), 0);
-        const ImVec2 value = text_size(Font::strong, term.value);
-        draw_text(ui, {line.x, line.y}, term.name, {.max_width = line.w - value.x - 10});
+        Box line = flow.next(line_step(Font::body), 0);
+        draw_text(ui, {line.x, line.y}, term.name, {.max_width = line.w});
+        const float together =
+            text_size(Font::body, term.name).x + 10 + text_size(Font::strong, term.value).x;
+        if (together > line.w) line = flow.next(line_step(Font::body), 0);
         draw_text(ui, {line.right(), line.y}, term.value, {.font = Font::strong, .align = Align::right});
         flow.say(term.meaning, Font::small, theme.quiet, 8);
     }

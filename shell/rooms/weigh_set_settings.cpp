@@ -40,7 +40,7 @@ void draw_set_settings(Ui& ui, const RoomView& view, Actions& actions, bool& ope
              Font::small, ui.look().quiet);
     const char* label = open ? "Done" : "Change these settings";
     const Box row = flow.next(30, 8);
-    if (button(ui, "set-settings", label, {row.x, row.y, button_width(label, ButtonKind::link) + 4, 28},
+    if (button(ui, "set-settings", label, {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28},
                ButtonKind::quiet, !view.read_only))
         open = !open;
     if (!open || view.read_only) return;

@@ -4,6 +4,7 @@
 #include "core/decision/write.hpp"
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_hold.hpp"
+#include "shell/rooms/weigh_points.hpp"
 #include "tests/shell/support/card_page.hpp"
 #include "tests/shell/support/headless.hpp"
 #include "tests/shell/support/judged_set.hpp"
@@ -142,6 +143,40 @@ TEST_CASE("what can be corrected, in a narrow card and in a wide one, to the end
             page.click("By the other methods too", "button");
             page.click("Change these settings", "button");
             picture("corrections");
+        }
+    }
+}
+
+TEST_CASE("points shared out over few items and many, narrow and wide") {
+    const std::string folder = std::string(STEELYARD_SOURCE_DIR) + "/build/pictures";
+    for (const bool dark : {false, true}) {
+        for (const std::size_t count : {3, 15}) {
+            for (const int width : {440, 760}) {
+                Decision d = judged_set(names(count, true));
+                d.criteria.weights = WeightsBy::points;
+                d.people = {Person{.id = "p0", .name = "A. Kern"}, Person{.id = "p1", .name = "M. Tolle"}};
+                for (const auto& person : d.people) {
+                    PointsEntry entry{.set = "goal", .by = person.id, .note = "as in the last tender"};
+                    for (std::size_t i = 0; i < count; ++i)
+                        entry.points.emplace_back("c" + std::to_string(i), (i * 7 + person.id.back()) % 9);
+                    d.points.push_back(entry);
+                }
+                PointsCard card;
+                CardPage page(d,
+                              [&](Ui& ui, const RoomView& view, Actions& actions, Box box) {
+                                  card.draw(ui, view, actions, own_entry(view, "goal"), box);
+                              },
+                              {.width = width, .height = 820, .dark = dark});
+                for (const char* person : {"", "p0"}) {
+                    page.person = person;
+                    page.frame(3);
+                    const std::string name = "points-" + std::to_string(count) + "-" + std::to_string(width) +
+                                             (*person == 0 ? "-room" : "-person") + (dark ? "-dark" : "");
+                    page.save_png(folder + "/" + name + ".png");
+                    INFO(name);
+                    CHECK(page.faults() == std::vector<std::string>{});
+                }
+            }
         }
     }
 }

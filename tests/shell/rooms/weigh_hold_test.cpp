@@ -271,7 +271,7 @@ TEST_CASE("the fewest changes, if several, are made together in one act") {
         MattersAnswer{.matters = Matters::not_known, .why = "too many cases."};
     hold.page.frame(2);
     CHECK(hold.says("Three changes found; fewer may do."));
-    CHECK(hold.says("Whether another answer here could change first place is not known: too many cases."));
+    CHECK(hold.says("Whether other answers here could change first place is not known: too many cases."));
     hold.page.click("Change 3 answers together", "radio");
     CHECK(hold.says("Floor space 2 times Noise (now 1/6). Throughput 3 times Ease of use (now 4)."));
     hold.page.click("Make these 3 changes", "button");
