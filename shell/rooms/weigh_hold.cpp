@@ -48,6 +48,15 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         if (entry.weights) draw_weights(ui, view, entry, flow);
         draw_terms(ui, view, entry, flow);
         draw_set_settings(ui, view, actions, settings_open_, flow);
+        // Criteria can be weighed by points as well; that is chosen where the tree is built.
+        if (const Node* node = find_node(view.decision.criteria, entry.set);
+            node != nullptr && !node->is_leaf()) {
+            const char* label = "Share out points instead";
+            const Box row = flow.next(30, 4);
+            if (button(ui, "to-points", label,
+                       {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28}, ButtonKind::quiet))
+                actions.go(RoomId::frame, entry.set);
+        }
     }
     area.reach(flow.y());
     return result;

@@ -109,7 +109,7 @@ void PointsCard::draw_row(Ui& ui, const RoomView& view, Actions& actions, const 
     const std::string range = range_at_stake(view.decision, view.results, entry.set, item);
     const bool narrow = flow.width() < 520;
     const float name_width = narrow ? flow.width() : std::clamp(flow.width() * 0.34F, 150.0F, 280.0F);
-    Box row = flow.next(narrow ? slider_height + 46 : slider_height + 14, 4);
+    Box row = flow.next(narrow ? slider_height + 58 : slider_height + 14, 4);
     Box names = row;
     Box work = row;
     if (narrow) {
@@ -199,6 +199,7 @@ void PointsCard::draw_foot(Ui& ui, const RoomView& view, Actions& actions, const
                            const Standing& now, TextFlow& flow) {
     const Theme& theme = ui.look();
     const Decision& d = view.decision;
+    flow.space(8);
     const std::string note = now.own != nullptr ? now.own->note : remark_;
     if (view.read_only) {
         flow.say(note, Font::small, theme.quiet);
