@@ -48,11 +48,18 @@ std::string joined(const std::string& a, const std::string& b) {
     return a.empty() ? b : b.empty() ? a : a + " \xC2\xB7 " + b;
 }
 
-/// The pairs worth correcting: what stands first, and what contradicts the others.
+/// What stands first is known, and what could stand there instead begins to be.
+bool ready(const Examination* found) {
+    return found != nullptr &&
+           (found->finished || (!found->pairs.empty() && !found->pairs.front().choices.empty()));
+}
+
+/// The pairs worth correcting: what stands first, and what is far off and has answers to put in its place.
 std::vector<const PairCorrection*> contradictions(const SetResult& entry, const Examination& found) {
     std::vector<const PairCorrection*> list;
     for (const auto& pair : found.pairs) {
-        if (list.empty() || !misfit_words(entry, pair.a, pair.b).empty()) list.push_back(&pair);
+        const bool far = misfit_words(entry, pair.a, pair.b) == "far off";
+        if (list.empty() || (far && (found.mean_of_several || !pair.choices.empty()))) list.push_back(&pair);
     }
     return list;
 }
@@ -71,7 +78,7 @@ std::optional<ItemPair> Corrections::draw(Ui& ui, const RoomView& view, Actions&
     const Examination* found = view.examination;
     if (found != nullptr && (found->set != entry.set || found->by != entry.by)) found = nullptr;
     const float top = flow.y();
-    if (found == nullptr || (found->pairs.empty() && !found->finished)) {
+    if (!ready(found)) {
         const double progress = found == nullptr ? 0 : found->progress;
         flow.say("Looking for what contradicts what \xE2\x80\xA6 " +
                      decimals_text(std::floor(100 * progress), 0) + " %",

@@ -43,7 +43,7 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         flow.space(2);
         for (const auto& circle : circle_sentences(view.decision, entry, most_circles))
             flow.say(circle, Font::body, 0, 2);
-        if (!entry.cycles.empty() || !entry.tied_cycles.empty()) flow.space(6);
+        if (!entry.cycles.empty()) flow.space(6);
         result = corrections_.draw(ui, view, actions, entry, flow);
         if (entry.weights) draw_weights(ui, view, entry, flow);
         draw_terms(ui, view, entry, flow);
@@ -130,6 +130,9 @@ void HoldCard::draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, 
         flow.say(term.meaning, Font::small, theme.quiet, 8);
     }
     for (const auto& sentence : worst_triad_sentences(view, entry)) flow.say(sentence, Font::small, 0, 0);
+    if (!entry.tied_cycles.empty()) flow.space(8);
+    for (const auto& sentence : tied_circle_sentences(view.decision, entry, most_circles))
+        flow.say(sentence, Font::small, theme.quiet, 0);
     flow.space(8);
 }
 

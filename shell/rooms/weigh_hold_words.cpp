@@ -113,6 +113,10 @@ HoldTerm zeta_term(const SetResult& entry) {
                                      : "It is not defined where answers are ties (1)."};
 }
 
+void add_left(std::vector<std::string>& list, std::size_t all, std::size_t most) {
+    if (all > most) list.push_back("And " + std::to_string(all - most) + " more.");
+}
+
 } // namespace
 
 std::string decimals_text(double value, int decimals) {
@@ -188,19 +192,25 @@ std::vector<std::string> circle_sentences(const Decision& decision, const SetRes
                                           std::size_t most) {
     std::vector<std::string> list;
     const auto name = [&](const Id& item) { return item_name(decision, entry.set, item); };
-    for (const auto& c : entry.cycles) {
-        if (list.size() == most) break;
+    for (std::size_t k = 0; k < std::min(most, entry.cycles.size()); ++k) {
+        const auto& c = entry.cycles[k];
         list.push_back(name(c[0]) + " over " + name(c[1]) + ", " + name(c[1]) + " over " + name(c[2]) +
                        ", yet " + name(c[2]) + " over " + name(c[0]) + ".");
     }
-    const std::size_t strict = list.size();
-    for (const auto& c : entry.tied_cycles) {
-        if (list.size() == most) break;
-        list.push_back((list.size() == strict ? "With a tie: " : "") + name(c[0]) + ", " + name(c[1]) +
-                       " and " + name(c[2]) + " run in a circle in which two count the same.");
+    add_left(list, entry.cycles.size(), most);
+    return list;
+}
+
+std::vector<std::string> tied_circle_sentences(const Decision& decision, const SetResult& entry,
+                                               std::size_t most) {
+    std::vector<std::string> list;
+    if (!entry.tied_cycles.empty()) list.push_back("Circles in which two count the same:");
+    for (std::size_t k = 0; k < std::min(most, entry.tied_cycles.size()); ++k) {
+        const auto& c = entry.tied_cycles[k];
+        list.push_back(item_name(decision, entry.set, c[0]) + ", " + item_name(decision, entry.set, c[1]) +
+                       " and " + item_name(decision, entry.set, c[2]) + ".");
     }
-    const std::size_t left = entry.cycles.size() + entry.tied_cycles.size() - list.size();
-    if (left > 0) list.push_back("And " + std::to_string(left) + " more.");
+    add_left(list, entry.tied_cycles.size(), most);
     return list;
 }
 

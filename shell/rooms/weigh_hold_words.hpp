@@ -20,9 +20,13 @@ struct HoldWords {
 /// What a board needs to know first.
 HoldWords hold_words(const RoomView& view, const SetResult& entry);
 
-/// "Noise over Floor space, Floor space over Drying, yet Drying over Noise." for each circle without ties,
-/// then for those with one or two, said so. Of more than `most` the first ones, and how many more.
+/// "Noise over Floor space, Floor space over Drying, yet Drying over Noise." for each circle. Of more than
+/// `most` the first ones, and how many more.
 std::vector<std::string> circle_sentences(const Decision& decision, const SetResult& entry, std::size_t most);
+
+/// The same for circles in which one or two answers are ties.
+std::vector<std::string> tied_circle_sentences(const Decision& decision, const SetResult& entry,
+                                               std::size_t most);
 
 /// A term of the trade with its figure, and what it is. Without a figure a dash stands there, and why.
 struct HoldTerm {

@@ -49,8 +49,12 @@ void CardPage::draw_frame() {
     sharpen_edges();
     Actions actions;
     {
-        const RoomView view{session_.decision(), session_.results(), person,
-                            read_only,           answering,          examination ? &*examination : nullptr};
+        const RoomView view{.decision = session_.decision(),
+                            .results = session_.results(),
+                            .person = person,
+                            .read_only = read_only,
+                            .answering = answering,
+                            .examination = examination ? &*examination : nullptr};
         draw_(ui_, view, actions, Box{0, 0, io.DisplaySize.x, io.DisplaySize.y}.inset(8));
     }
     ImGui::End();
