@@ -37,9 +37,10 @@ bool App::State::is_example() const {
 RoomView App::State::view() {
     if (!person.empty() && find_person(session.decision(), person) == nullptr) person.clear();
     if (!handing_to.empty() && find_person(session.decision(), handing_to) == nullptr) handing_to.clear();
-    // Both tell of the standing, or of others.
+    // What is sealed: the others, and the standing. One's own contradictions are one's own.
     const bool open = answering != Answering::alone;
-    const bool examined = open && examination && examined_revision == session.revision();
+    const bool examined = examination && examined_revision == session.revision() &&
+                          (open || (!person.empty() && examination->found().by == person));
     const bool differed = open && differing && differing_revision == session.revision();
     return {.decision = session.decision(),
             .results = seen_results(),
@@ -275,7 +276,8 @@ void App::State::apply(Actions::Step step) {
         asked = AskedStep{std::move(step), sentence(applied.losses)};
         return;
     }
-    const Stamp when = stamp();
+    Stamp when = stamp();
+    when.why = std::move(step.why);
     for (auto& edit : step.edits) set_time(edit, when.at);
     const auto outcome = session.apply(step.edits, when, std::move(step.label));
     if (!outcome.problems.empty()) message = sentence(outcome.problems.front());

@@ -40,7 +40,6 @@ SetResult unanswered_entry(const SetResult& group, const Decision& decision, con
 
 Results sealed_results(const Results& results, const Decision& decision, const Id& person) {
     Results sealed;
-    sealed.decision_sha256 = results.decision_sha256;
     sealed.settings = results.settings;
     sealed.options = results.options;
     sealed.scores.assign(sealed.options.size(), 0);
@@ -53,7 +52,7 @@ Results sealed_results(const Results& results, const Decision& decision, const I
     for (const auto& leaf : results.leaves) {
         const Node* node = find_node(decision.criteria, leaf.leaf);
         if (node != nullptr && node->rate == RateBy::figure)
-            sealed.leaves.push_back({leaf.leaf, 0, leaf.local, leaf.missing});
+            sealed.leaves.push_back({leaf.leaf, 0, leaf.local, leaf.missing, leaf.worths});
     }
     for (const auto& must : results.musts) {
         if (!of_a_worth(decision, must.requirement)) sealed.musts.push_back(must);

@@ -44,10 +44,11 @@ struct RoomView {
 /// What a room asks for. Carried out after the frame.
 class Actions {
 public:
-    /// One step. Where it takes entries away the app asks first, naming how many.
+    /// One step. Where it takes entries away the app asks first, naming how many. `why`: the reason for the
+    /// log.
     void edit(Edit edit) { this->edit(std::vector<Edit>{std::move(edit)}); }
-    void edit(std::vector<Edit> edits, std::string label = {}) {
-        steps.push_back({std::move(edits), std::move(label)});
+    void edit(std::vector<Edit> edits, std::string label = {}, std::string why = {}) {
+        steps.push_back({std::move(edits), std::move(label), std::move(why)});
     }
 
     /// Another room, showing the item with this id (a set, a criterion, an option) if not empty.
@@ -71,6 +72,7 @@ public:
     struct Step {
         std::vector<Edit> edits;
         std::string label;
+        std::string why;
     };
     struct Destination {
         RoomId room = RoomId::frame;

@@ -3,6 +3,7 @@
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/weigh_answers.hpp"
+#include "shell/rooms/weigh_differ.hpp"
 #include "shell/rooms/weigh_grid.hpp"
 #include "shell/rooms/weigh_hands.hpp"
 #include "shell/rooms/weigh_hold.hpp"
@@ -35,7 +36,7 @@ public:
         // Short or narrow pages scroll as a whole; the list of sets becomes one to drop down.
         const bool narrow = area.w < 700;
         const float head = head_height(view, set_, area.w);
-        const float least = narrow ? 880.0f + head : 552.0f + (head > 0 ? head + 10 : 0);
+        const float least = narrow ? 880.0f + head : 590.0f + (head > 0 ? head + 10 : 0);
         if (narrow || area.h < least) {
             ScrollArea scroll(ui, "weigh", area);
             Box inner = scroll.inner();
@@ -62,6 +63,8 @@ public:
         hands_.reset();
         revealed_.clear();
         everybody_ = false;
+        differ_.reset();
+        differing_ = false;
         grid_.reset();
         hold_.reset();
         points_.reset();
@@ -146,14 +149,32 @@ private:
         const bool open = view.answering == Answering::agreed && view.person.empty();
         const bool together = (nobody && revealed_.contains(set_)) || (open && everybody_);
         const bool hands = view.answering == Answering::hands;
+        const bool may_differ = open && !everybody_ && DifferPage::has_something(view);
+        if (!may_differ) differing_ = false;
         // What is read across a room stands alone.
         if (!narrow && (together || hands) && free.w >= 150) {
             draw_set_choice(ui, view, {free.x, free.y + 2, std::min(free.w, 320.0f), 34});
         } else if (narrow || together || hands) {
-            draw_set_choice(ui, view, area.take_top(36, 10));
+            Box row = area.take_top(36, 10);
+            if (may_differ)
+                draw_differ_switch(ui, row.take_right(std::min(row.w * 0.5f, differ_width()), 10));
+            draw_set_choice(ui, view, row);
         } else {
-            const Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
-            if (const auto set = draw_set_list(ui, view, set_, revealed_, list)) set_ = *set;
+            Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
+            if (may_differ) draw_differ_switch(ui, list.take_bottom(36, 10));
+            if (const auto set = draw_set_list(ui, view, set_, revealed_, list)) {
+                set_ = *set;
+                differing_ = false;
+            }
+        }
+        if (differing_) {
+            if (const auto chosen = differ_.draw(ui, view, actions, area)) {
+                set_ = chosen->set;
+                shown_set_ = chosen->set;
+                pick(chosen->pair);
+                differing_ = false;
+            }
+            return;
         }
         if (together && !entry.from_points) {
             together_.draw(ui, view, actions, group, pair_, area);
@@ -168,10 +189,23 @@ private:
         }
     }
 
+    static constexpr const char* differ_label = "Where you disagree";
+    static float differ_width() { return button_width(differ_label); }
+
+    /// To the page of disagreements and back.
+    void draw_differ_switch(Ui& ui, const Box& box) {
+        if (button(ui, "differ", differing_ ? "Back to the arm" : differ_label, box))
+            differing_ = !differing_;
+    }
+
     void draw_work(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, Box area,
                    bool narrow) {
-        if (!view.sealed()) actions.examine(set_, view.person);
-        const float card = narrow ? 352.0f : std::clamp(area.h * 0.57f, 350.0f, 500.0f);
+        if (!view.sealed() || !view.person.empty()) actions.examine(set_, view.person);
+        if (grid_.large()) {
+            if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, area)) pair_ = *pair;
+            return;
+        }
+        const float card = narrow ? 352.0f : std::clamp(area.h * 0.55f, 330.0f, 500.0f);
         card_.draw(ui, view, actions, entry, pair_, area.take_top(card, 12));
         Box below = area;
         Box grid = below;
@@ -184,7 +218,8 @@ private:
             grid = below.take_left(std::clamp(side, below.w * 0.42f, below.w * 0.52f), 12);
             words = below;
         }
-        if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, grid)) pick(*pair);
+        // The keyboard stays with the grid.
+        if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, grid)) pair_ = *pair;
         if (const auto pair = hold_.draw(ui, view, actions, entry, words)) pick(*pair);
     }
 
@@ -196,6 +231,8 @@ private:
     PairCard card_;
     TogetherCard together_;
     HandsCard hands_;
+    DifferPage differ_;
+    bool differing_ = false; ///< The page of disagreements is shown.
     PairGrid grid_;
     HoldCard hold_;
     PointsCard points_;

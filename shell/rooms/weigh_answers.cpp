@@ -3,6 +3,7 @@
 #include <algorithm>
 
 #include "core/decision/lookup.hpp"
+#include "core/judgment/next_question.hpp"
 #include "shell/sealed_results.hpp"
 #include "shell/sentences.hpp"
 #include "shell/words.hpp"
@@ -22,6 +23,23 @@ const Finished* finished_by(const Decision& decision, const Id& set, const Id& b
 
 std::string answers(std::size_t count) {
     return std::to_string(count) + (count == 1 ? " more answer" : " more answers");
+}
+
+/// What is known of a set: for `by` his answers and the agreed ones, for the room what anybody answered.
+PairMatrix answered(const Decision& decision, const SetResult& entry, const Id& by,
+                    const std::vector<ItemPair>& left) {
+    PairMatrix matrix(entry.items.size());
+    for (std::size_t i = 0; i < entry.items.size(); ++i) {
+        for (std::size_t j = i + 1; j < entry.items.size(); ++j) {
+            const ItemPair pair{entry.items[i], entry.items[j]};
+            if (holds(left, pair)) continue;
+            auto ratio = said_ratio(decision, entry.set, Id{}, pair[0], pair[1]);
+            if (!ratio && !by.empty()) ratio = said_ratio(decision, entry.set, by, pair[0], pair[1]);
+            if (!ratio && by.empty()) ratio = group_ratio(entry, pair[0], pair[1]);
+            if (ratio) matrix.set(i, j, *ratio);
+        }
+    }
+    return matrix;
 }
 
 } // namespace
@@ -133,38 +151,42 @@ std::vector<ItemPair> left_for_hands(const Decision& decision, const SetResult& 
 
 std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Asking& asking,
                                   const std::optional<ItemPair>& from) {
-    const auto wanted = [&](const ItemPair& pair) {
-        return !holds(asking.skipped, pair) && !(from && same_pair(*from, pair));
+    const auto place = [&](const Id& item) {
+        return static_cast<std::size_t>(std::find(entry.items.begin(), entry.items.end(), item) -
+                                        entry.items.begin());
     };
-    for (const auto& pair : asking.left) {
-        if (!asking.star.empty() && (pair[0] == asking.star || pair[1] == asking.star) && wanted(pair))
-            return pair;
+    std::optional<std::size_t> star;
+    if (place(asking.star) < entry.items.size()) star = place(asking.star);
+    std::vector<PairMatrix::Pair> not_now;
+    for (std::size_t i = 0; i < entry.items.size(); ++i) {
+        for (std::size_t j = i + 1; j < entry.items.size(); ++j) {
+            const ItemPair pair{entry.items[i], entry.items[j]};
+            const bool shown = from && same_pair(*from, pair);
+            if (shown || holds(asking.skipped, pair) || !holds(asking.left, pair)) not_now.push_back({i, j});
+        }
     }
-    bool passed = !from;
-    std::optional<ItemPair> earlier;
-    for (const auto& pair : asked_pairs(view.decision, entry, asking.by)) {
-        if (from && same_pair(*from, pair)) passed = true;
-        if (!wanted(pair) || !holds(asking.left, pair)) continue;
-        if (passed) return pair;
-        if (!earlier) earlier = pair;
-    }
-    return earlier;
+    const auto next = next_question(answered(view.decision, entry, asking.by, asking.left), star, not_now);
+    if (!next) return std::nullopt;
+    return ItemPair{entry.items[(*next)[0]], entry.items[(*next)[1]]};
 }
 
 std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress) {
     if (progress.left.empty() || entry.from_points) return "";
-    const bool all = decision.settings.method == Method::column_average;
-    const std::size_t links = all ? entry.missing.size() : entry.parts.size() - 1;
-    const std::size_t more = progress.left.size() > links ? progress.left.size() - links : 0;
-    const std::string firm = " would firm them up.";
+    const QuestionsNeeded needed = questions_needed(answered(decision, entry, entry.by, progress.left));
+    const bool all = decision.settings.method == Method::column_average; // Which needs every pair.
+    const std::size_t links = all ? entry.missing.size() : needed.to_connect;
+    const std::size_t firm = std::min(std::max(needed.to_firm_up, links), progress.left.size()) - links;
+    const std::string would = " would firm them up.";
     if (links > 0) {
         const std::string give = answers(links) + (links == 1 ? " gives weights" : " give weights");
-        return more == 0 ? give + "." : give + "; " + std::to_string(more) + " more" + firm;
+        return firm == 0 ? give + "." : give + "; " + std::to_string(firm) + " more" + would;
     }
-    return "These answers give weights; " + std::to_string(more) + " more" + firm;
+    if (firm == 0) return "These answers give firm weights; more would check them.";
+    return "These answers give weights; " + std::to_string(firm) + " more" + would;
 }
 
 std::string enough_sentence(const RoomView& view, const SetResult& entry) {
+    if (view.sealed()) return ""; // It would tell of the standing.
     const Examination* found = view.examination;
     if (found == nullptr || found->set != entry.set || !found->enough) return "";
     const MattersAnswer& enough = *found->enough;

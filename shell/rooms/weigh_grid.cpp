@@ -1,85 +1,103 @@
 #include "shell/rooms/weigh_grid.hpp"
 
 #include <algorithm>
-#include <cmath>
-#include <cstdio>
 
-#include "core/decision/lookup.hpp"
+#include "shell/rooms/weigh_answers.hpp"
+#include "shell/rooms/weigh_matrix_plan.hpp"
+#include "shell/rooms/weigh_table.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
-#include "shell/words.hpp"
 
 namespace steelyard {
+namespace {
 
-std::optional<ItemPair> PairGrid::draw(Ui& ui, const RoomView& view, Actions&, const SetResult& entry,
+constexpr float head_height = 30;
+constexpr float text_button = 26;
+
+/// The entry whose answers `person` gives in a set of pairs; none for a set from points.
+std::optional<SetResult> paired_entry(const RoomView& view, const Id& set) {
+    if (group_entry(view.results, set) == nullptr) return std::nullopt;
+    SetResult entry = own_entry(view, set);
+    if (entry.from_points || entry.items.size() < 2) return std::nullopt;
+    return entry;
+}
+
+} // namespace
+
+bool PairGrid::paste(const std::string& text, const RoomView& view, Actions& actions, const Id& set) {
+    const auto entry = paired_entry(view, set);
+    if (!entry || view.read_only) return false;
+    const MatrixPlan plan = plan_matrix(view, *entry, text, false);
+    paste_.open(text, set, view.person);
+    actions.say(plan.problem.empty() ? "Pasted, not entered yet: " + plan.words
+                                     : "Nothing was changed. " + plan.problem);
+    return true;
+}
+
+std::optional<ItemPair> PairGrid::draw(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry,
                                        const ItemPair& chosen, Box box) {
     const Theme& theme = ui.look();
-    std::optional<ItemPair> result;
+    if (set_ != entry.set) table_ = {};
+    set_ = entry.set;
     const Card card(ui, box);
-    Box inside = box.inset(16);
-    draw_text(ui, inside.take_top(28).at(), "All pairs of this set",
-              {.font = Font::strong, .ink = theme.quiet});
-    ScrollArea area(ui, "grid", inside);
-    const Box in = area.inner();
-    const std::size_t n = entry.items.size();
-    const auto columns = static_cast<float>(std::max<std::size_t>(n - 1, 1));
-    const float names = std::clamp(in.w - 58 * columns, 84.0f, 160.0f);
-    const float cell = std::clamp((in.w - names - 4) / columns, 50.0f, 76.0f);
-    for (std::size_t j = 1; j < n; ++j) {
-        const float x = in.x + names + cell * static_cast<float>(j - 1);
-        draw_text(ui, {x + cell / 2, in.y}, item_name(view.decision, entry.set, entry.items[j]),
-                  {.font = Font::small, .ink = theme.quiet, .max_width = cell - 6, .align = Align::centre});
+    Box inside = box.inset(14);
+    if (paste_.is_open(entry.set, view.person)) {
+        table_.has_keyboard = true;
+        if (!paste_.draw(ui, view, actions, entry, inside)) table_.take_keyboard = true;
+        return std::nullopt;
     }
-    float y = in.y + 22;
-    for (std::size_t i = 0; i + 1 < n; ++i) {
-        draw_text(ui, {in.x, y + 11}, item_name(view.decision, entry.set, entry.items[i]),
-                  {.max_width = names - 8});
-        for (std::size_t j = i + 1; j < n; ++j) {
-            const ItemPair pair{entry.items[i], entry.items[j]};
-            const Box at{in.x + names + cell * static_cast<float>(j - 1) + 2, y, cell - 4, 42};
-            const auto own = said_ratio(view.decision, entry.set, view.person, pair[0], pair[1]);
-            const auto agreed = said_ratio(view.decision, entry.set, Id{}, pair[0], pair[1]);
-            const auto said = agreed ? agreed : own;
-            const bool missing = std::any_of(entry.missing.begin(), entry.missing.end(),
-                                             [&](const auto& p) { return p == pair; });
-            const std::string words = misfit_words(entry, pair[0], pair[1]);
-            const bool far = words == "far off";
-            const ImU32 ground = missing ? theme.card : far ? theme.red_wash : theme.rail;
-            ImDrawList* list = ImGui::GetWindowDrawList();
-            list->AddRectFilled(at.at(), at.end(), ground, 6);
-            if (missing) list->AddRect(at.at(), at.end(), theme.edge, 6);
-            if (pair == chosen) list->AddRect(at.at(), at.end(), theme.brass, 6, 0, 2.5f);
-            if (far && pair != chosen) list->AddRect(at.at(), at.end(), theme.red, 6, 0, 1.5f);
-            // A mean of several judges has no single answer behind it: what the group's matrix holds is
-            // shown.
-            std::string text = "\xE2\x80\x94";
-            if (const auto shown = said ? said : group_ratio(entry, pair[0], pair[1]))
-                text = ratio_text(*shown);
-            const std::string label = item_name(view.decision, entry.set, pair[0]) + " against " +
-                                      item_name(view.decision, entry.set, pair[1]);
-            const OnPaper paper(ui, ground);
-            if (press_area(ui, "cell/" + pair[0] + "/" + pair[1], label, at, "gridcell",
-                           missing ? "open" : text))
-                result = pair;
-            const bool two = !words.empty();
-            draw_text(ui, {at.x + at.w / 2, at.y + (two ? 4.0f : 11.0f)}, text,
-                      {.font = far ? Font::strong : Font::body,
-                       .ink = missing ? theme.brass_ink : theme.ink,
-                       .align = Align::centre});
-            if (two) {
-                draw_text(ui, {at.x + at.w / 2, at.y + 23}, words,
-                          {.font = Font::small,
-                           .ink = far ? theme.red : theme.quiet,
-                           .max_width = at.w - 4,
-                           .align = Align::centre});
-            }
-        }
-        y += 48;
+    const bool same = (table_.row == chosen[0] && table_.column == chosen[1]) ||
+                      (table_.row == chosen[1] && table_.column == chosen[0]);
+    if (!same) {
+        table_.row = chosen[0];
+        table_.column = chosen[1];
+        table_.reveal = true;
+        table_.editing = false;
     }
-    area.reach(y);
-    area.reach_right(in.x + names + cell * static_cast<float>(n - 1));
-    return result;
+    const PairTable table(view, entry);
+    draw_head(ui, view, actions, table, inside.take_top(head_height, 4));
+
+    // What the chosen cell says stands below; it takes from the table only what it needs.
+    const auto place = [&](const Id& item) {
+        return static_cast<std::size_t>(std::find(entry.items.begin(), entry.items.end(), item) -
+                                        entry.items.begin());
+    };
+    const std::size_t i = place(table_.row);
+    const std::size_t j = place(table_.column);
+    const bool known = i < entry.items.size() && j < entry.items.size() && i != j;
+    const std::string words = known ? table.sentences(i, j) : std::string{};
+    const float text_height = paragraph_height(inside.w - 10, words, Font::small);
+    const float most = std::max(2 * line_step(Font::small), inside.h * 0.34F);
+    Box below = inside.take_bottom(std::clamp(text_height, 2 * line_step(Font::small), most), 6);
+    const float legend = draw_mark_legend(ui, table, inside, false);
+    if (legend > 0) draw_mark_legend(ui, table, inside.take_bottom(legend, 6), true);
+
+    const auto picked = draw_pair_table(ui, view, actions, entry, table, table_, inside);
+    if (text_height <= below.h + 1) {
+        draw_paragraph(ui, below.at(), below.w - 10, words, {.font = Font::small, .ink = theme.quiet});
+    } else {
+        ScrollArea area(ui, "pair-words", below);
+        const Box in = area.inner();
+        const float h =
+            draw_paragraph(ui, in.at(), below.w - 16, words, {.font = Font::small, .ink = theme.quiet});
+        area.reach(in.y + h);
+    }
+    return picked;
+}
+
+void PairGrid::draw_head(Ui& ui, const RoomView& view, Actions& actions, const PairTable& table, Box head) {
+    const auto act = [&](const char* id, const char* label, bool enabled = true) {
+        const Box box = head.take_right(button_width(label, ButtonKind::link) + 4, 2);
+        return button(ui, id, label, {box.x, box.y, box.w, text_button}, ButtonKind::quiet, enabled);
+    };
+    if (act("grid-large", large_ ? "Smaller" : "Larger")) large_ = !large_;
+    if (act("grid-paste", "Paste", !view.read_only)) paste_.open({}, set_, view.person);
+    if (act("grid-copy", "Copy")) copy_matrix(actions, table);
+    const char* title = "All pairs of this set";
+    const char* brief = "All pairs";
+    draw_text(ui, {head.x, head.y + 4}, text_size(Font::strong, title).x <= head.w ? title : brief,
+              {.font = Font::strong, .ink = ui.look().quiet, .max_width = head.w});
 }
 
 } // namespace steelyard

@@ -1,130 +1,139 @@
 #include "shell/rooms/weigh_hold.hpp"
 
 #include <algorithm>
-#include <cmath>
-#include <cstdio>
 
 #include "core/decision/lookup.hpp"
+#include "shell/rooms/text_flow.hpp"
+#include "shell/rooms/weigh_hold_words.hpp"
+#include "shell/rooms/weigh_set_settings.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
 #include "shell/widgets/text.hpp"
-#include "shell/words.hpp"
 
 namespace steelyard {
 namespace {
 
-std::string percent(double weight) {
-    char buffer[32];
-    std::snprintf(buffer, sizeof buffer, "%.1f %%", 100 * weight);
-    return buffer;
-}
+constexpr std::size_t most_circles = 6;
+constexpr float weight_line = 25;
+constexpr float percent_width = 62;
 
-std::string digits(const char* format, double value) {
-    char buffer[64];
-    std::snprintf(buffer, sizeof buffer, format, value);
-    return buffer;
-}
-
-const char* table_name(RandomIndexTable table) {
-    return table == RandomIndexTable::saaty_1980 ? "Saaty 1980" : "Alonso and Lamata 2006";
-}
-
-/// The headline of a set, and the ink it is said in.
-struct Headline {
-    std::string text;
-    ImU32 ink;
-};
-
-Headline headline(const Theme& theme, const Decision& d, const SetResult& entry) {
-    const SetState state = state_of(d, entry);
-    if (!entry.weights) {
-        return {entry.parts.size() > 1 ? "These answers do not hang together yet"
-                                       : "This method needs every pair",
-                theme.brass_ink};
-    }
-    if (state.contradicts) return {"Some answers contradict each other", theme.red};
-    if (!entry.cycles.empty()) return {"Three answers run in a circle", theme.red};
-    if (!entry.cr) return {"Nothing here can contradict", theme.green};
-    return {"These answers hold together", theme.green};
+ImU32 ink_of(const Theme& theme, HoldTone tone) {
+    return tone == HoldTone::holds ? theme.green : tone == HoldTone::open ? theme.brass_ink : theme.red;
 }
 
 } // namespace
 
-std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions&, const SetResult& entry,
+std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry,
                                        Box box) {
     const Theme& theme = ui.look();
-    const Decision& d = view.decision;
-    std::optional<ItemPair> result;
-    const Headline head = headline(theme, d, entry);
     const Card card(ui, box);
     Box inside = box.inset(16);
     draw_text(ui, inside.take_top(28).at(), "Does it hold together?",
-              {.font = Font::strong, .ink = theme.quiet});
+              {.font = Font::strong, .ink = theme.quiet, .max_width = inside.w});
     ScrollArea area(ui, "words", inside);
     const Box in = area.inner();
-    const float w = in.w - 4;
-    float y = in.y;
-    y += draw_paragraph(ui, {in.x, y}, w, head.text, {.font = Font::strong, .ink = head.ink}) + 2;
-    const auto say = [&](const std::string& text, Font font, ImU32 ink) {
-        y += draw_paragraph(ui, {in.x, y}, w, text, {.font = font, .ink = ink});
-    };
-    if (entry.parts.size() > 1) {
-        for (const auto& part : entry.parts) {
-            std::string names;
-            for (const auto& item : part)
-                names += (names.empty() ? "" : ", ") + item_name(d, entry.set, item);
-            say("\xE2\x80\xA2 " + names, Font::body, theme.ink);
-        }
-        say("No answer links these with each other.", Font::small, theme.quiet);
-    }
-    const bool contradicts = entry.cr && *entry.cr > d.settings.limit;
-    if (contradicts && !entry.misfits.empty() && entry.misfits.front().implied) {
-        const Misfit& worst = entry.misfits.front();
-        say((view.person.empty() ? "It was said that " : "You said ") +
-                pair_sentence(d, entry.set, worst.a, worst.b, worst.given) + ".",
-            Font::body, theme.ink);
-        say("The other answers say " + pair_sentence(d, entry.set, worst.a, worst.b, *worst.implied) + ".",
-            Font::body, theme.ink);
-        const std::string label = "Look at this pair";
-        if (button(ui, "look", label, {in.x, y + 4, button_width(label), 32}))
-            result = ItemPair{worst.a, worst.b};
-        y += 44;
-    }
-    for (const auto& c : entry.cycles) {
-        say(item_name(d, entry.set, c[0]) + " over " + item_name(d, entry.set, c[1]) + ", " +
-                item_name(d, entry.set, c[1]) + " over " + item_name(d, entry.set, c[2]) + ", yet " +
-                item_name(d, entry.set, c[2]) + " over " + item_name(d, entry.set, c[0]) + ".",
-            Font::body, theme.ink);
-    }
-    if (entry.cr) {
-        say("Consistency ratio CR " + digits("%.3f", *entry.cr) + ", limit " +
-                digits("%.2f", d.settings.limit) + " \xC2\xB7 CI " + digits("%.3f", *entry.ci) +
-                " \xC2\xB7 RI " + digits("%.3f", *entry.ri) + " (" + table_name(d.settings.random_index) +
-                (entry.missing.empty() ? ")" : ", fewer for missing pairs)"),
-            Font::small, theme.quiet);
-    } else if (entry.weights) {
-        say(entry.items.size() <= 2
-                ? "Two items have no consistency ratio: one answer cannot contradict itself."
-                : "CR \xE2\x80\x94: there are just enough answers, or the table of random indices ends "
-                  "before.",
-            Font::small, theme.quiet);
-    }
-    if (entry.weights) {
-        y += 10;
-        draw_text(ui, {in.x, y}, "What these answers give", {.font = Font::strong, .ink = theme.quiet});
-        y += 26;
-        for (std::size_t i = 0; i < entry.items.size(); ++i) {
-            const double weight = (*entry.weights)[i];
-            const float name_width = std::min(w * 0.42f, 170.0f);
-            draw_text(ui, {in.x, y}, item_name(d, entry.set, entry.items[i]), {.max_width = name_width - 8});
-            bar(ui, {in.x + name_width, y + 6, w - name_width - 66, 8}, static_cast<float>(weight),
-                theme.steel);
-            draw_text(ui, {in.x + w, y}, percent(weight), {.align = Align::right});
-            y += 25;
+    // The place of the scroll bar is kept free, so that nothing moves when it comes.
+    TextFlow flow(ui, in.x, in.y, inside.w - ImGui::GetStyle().ScrollbarSize - 6);
+    const HoldWords words = hold_words(view, entry);
+    flow.say(words.headline, Font::strong, ink_of(theme, words.tone), 2);
+    flow.say(words.more, Font::small, theme.quiet);
+    std::optional<ItemPair> result;
+    if (!hidden_while_sealed(view, entry)) {
+        actions.examine(entry.set, entry.by);
+        flow.space(2);
+        for (const auto& circle : circle_sentences(view.decision, entry, most_circles))
+            flow.say(circle, Font::body, 0, 2);
+        if (!entry.cycles.empty()) flow.space(6);
+        result = corrections_.draw(ui, view, actions, entry, flow);
+        if (entry.weights) draw_weights(ui, view, entry, flow);
+        draw_terms(ui, view, entry, flow);
+        draw_set_settings(ui, view, actions, settings_open_, flow);
+        // Criteria can be weighed by points as well; that is chosen where the tree is built.
+        if (const Node* node = find_node(view.decision.criteria, entry.set);
+            node != nullptr && !node->is_leaf()) {
+            const char* label = "Share out points instead";
+            const Box row = flow.next(30, 4);
+            if (button(ui, "to-points", label,
+                       {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28}, ButtonKind::quiet))
+                actions.go(RoomId::frame, entry.set);
         }
     }
-    area.reach(y + 4);
+    area.reach(flow.y());
     return result;
+}
+
+void HoldCard::draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) {
+    const Theme& theme = ui.look();
+    const Decision& d = view.decision;
+    flow.space(6);
+    flow.say("What these answers give", Font::strong, theme.quiet);
+    const float name_width = std::min(flow.width() * 0.46F, 190.0F);
+    for (std::size_t i = 0; i < entry.items.size(); ++i) {
+        const Box row = flow.next(weight_line, 0);
+        const double weight = (*entry.weights)[i];
+        draw_text(ui, row.at(), item_name(d, entry.set, entry.items[i]), {.max_width = name_width - 8});
+        bar(ui, {row.x + name_width, row.y + 6, row.w - name_width - percent_width - 6, 8},
+            static_cast<float>(weight), theme.steel);
+        draw_text(ui, {row.right(), row.y}, percent_text(weight), {.align = Align::right});
+    }
+    const char* label = all_methods_ ? "Only the chosen method" : "By the other methods too";
+    const Box row = flow.next(30, 4);
+    if (button(ui, "all-methods", label, {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28},
+               ButtonKind::quiet))
+        all_methods_ = !all_methods_;
+    if (!all_methods_) return;
+    struct Column {
+        const char* name;
+        const std::optional<std::vector<double>>* weights;
+    };
+    const Column columns[] = {{"eigenvector", &entry.eigenvector},
+                              {"geometric", &entry.geometric_mean},
+                              {"columns", &entry.column_average}};
+    constexpr float column_width = 78;
+    // In a narrow card the names stand above their figures.
+    const bool narrow = flow.width() < 3 * column_width + 90;
+    const auto at = [&](const Box& line, int k) {
+        return narrow ? line.x + line.w * static_cast<float>(k + 1) / 3
+                      : line.right() - column_width * static_cast<float>(2 - k);
+    };
+    const Box head = flow.next(20, 0);
+    for (int k = 0; k < 3; ++k)
+        draw_text(ui, {at(head, k), head.y}, columns[k].name,
+                  {.font = Font::small, .ink = theme.quiet, .align = Align::right});
+    for (std::size_t i = 0; i < entry.items.size(); ++i) {
+        Box line = flow.next(22, 0);
+        draw_text(ui, line.at(), item_name(d, entry.set, entry.items[i]),
+                  {.font = Font::small, .max_width = narrow ? line.w : line.w - 3 * column_width - 4});
+        if (narrow) line = flow.next(20, 2);
+        for (int k = 0; k < 3; ++k) {
+            const auto& weights = *columns[k].weights;
+            draw_text(ui, {at(line, k), line.y}, weights ? percent_text((*weights)[i]) : "\xE2\x80\x94",
+                      {.font = Font::small, .align = Align::right});
+        }
+    }
+    if (!entry.column_average)
+        flow.say("Columns can be averaged only where no pair is missing.", Font::small, theme.quiet);
+    flow.space(6);
+}
+
+void HoldCard::draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) const {
+    const Theme& theme = ui.look();
+    flow.space(6);
+    flow.say("The figures of the trade", Font::strong, theme.quiet);
+    for (const auto& term : hold_terms(view.decision, entry)) {
+        Box line = flow.next(line_step(Font::body), 0);
+        draw_text(ui, {line.x, line.y}, term.name, {.max_width = line.w});
+        const float together =
+            text_size(Font::body, term.name).x + 10 + text_size(Font::strong, term.value).x;
+        if (together > line.w) line = flow.next(line_step(Font::body), 0);
+        draw_text(ui, {line.right(), line.y}, term.value, {.font = Font::strong, .align = Align::right});
+        flow.say(term.meaning, Font::small, theme.quiet, 8);
+    }
+    for (const auto& sentence : worst_triad_sentences(view, entry)) flow.say(sentence, Font::small, 0, 0);
+    if (!entry.tied_cycles.empty()) flow.space(8);
+    for (const auto& sentence : tied_circle_sentences(view.decision, entry, most_circles))
+        flow.say(sentence, Font::small, theme.quiet, 0);
+    flow.space(8);
 }
 
 } // namespace steelyard
