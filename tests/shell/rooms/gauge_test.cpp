@@ -185,6 +185,7 @@ TEST_CASE("grades are picked from the list or by their number, agreed or by who 
     }
     SECTION("by the person who answers, who does not see what the others said") {
         page.choose("Who answers", "J. Wirth (maintenance)");
+        page.click("I am J. Wirth: begin");
         CHECK_THAT(page.cell("Drying of Cove"), StartsWith("open"));
         page.click("Drying of Cove", "gridcell");
         page.type("1");

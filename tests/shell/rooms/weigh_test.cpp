@@ -120,6 +120,7 @@ TEST_CASE("a person's answers are his own, and what is agreed stands beside them
     page.settle();
     page.click("Judge 2", "option");
     page.settle();
+    page.click("Answer in the open", "button");
     page.click("Criterion A against Criterion B", "gridcell");
     CHECK(page.find("Agreed in the room: Criterion A counts 3 times as much as Criterion B. That stands in "
                     "place of your answer.") != nullptr);
