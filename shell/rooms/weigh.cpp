@@ -36,7 +36,7 @@ public:
         // Short or narrow pages scroll as a whole; the list of sets becomes one to drop down.
         const bool narrow = area.w < 700;
         const float head = head_height(view, set_, area.w);
-        const float least = narrow ? 880.0f + head : 590.0f + (head > 0 ? head + 10 : 0);
+        const float least = narrow ? 880.0f + head : 600.0f + (head > 0 ? head + 10 : 0);
         if (narrow || area.h < least) {
             ScrollArea scroll(ui, "weigh", area);
             Box inner = scroll.inner();
@@ -205,7 +205,11 @@ private:
             if (const auto pair = grid_.draw(ui, view, actions, entry, pair_, area)) pair_ = *pair;
             return;
         }
-        const float card = narrow ? 352.0f : std::clamp(area.h * 0.55f, 330.0f, 500.0f);
+        if (hold_.large()) {
+            if (const auto pair = hold_.draw(ui, view, actions, entry, area)) pick(*pair);
+            return;
+        }
+        const float card = narrow ? 352.0f : std::clamp(area.h * 0.55f, 350.0f, 500.0f);
         card_.draw(ui, view, actions, entry, pair_, area.take_top(card, 12));
         Box below = area;
         Box grid = below;

@@ -3,6 +3,7 @@
 #include <algorithm>
 
 #include "core/decision/lookup.hpp"
+#include "core/judgment/judged_set.hpp"
 #include "core/judgment/next_question.hpp"
 #include "shell/sealed_results.hpp"
 #include "shell/sentences.hpp"
@@ -21,25 +22,60 @@ const Finished* finished_by(const Decision& decision, const Id& set, const Id& b
     return found == decision.finished.end() ? nullptr : &*found;
 }
 
-std::string answers(std::size_t count) {
-    return std::to_string(count) + (count == 1 ? " more answer" : " more answers");
-}
-
-/// What is known of a set: for `by` his answers and the agreed ones, for the room what anybody answered.
-PairMatrix answered(const Decision& decision, const SetResult& entry, const Id& by,
-                    const std::vector<ItemPair>& left) {
-    PairMatrix matrix(entry.items.size());
-    for (std::size_t i = 0; i < entry.items.size(); ++i) {
-        for (std::size_t j = i + 1; j < entry.items.size(); ++j) {
-            const ItemPair pair{entry.items[i], entry.items[j]};
-            if (holds(left, pair)) continue;
-            auto ratio = said_ratio(decision, entry.set, Id{}, pair[0], pair[1]);
-            if (!ratio && !by.empty()) ratio = said_ratio(decision, entry.set, by, pair[0], pair[1]);
-            if (!ratio && by.empty()) ratio = group_ratio(entry, pair[0], pair[1]);
-            if (ratio) matrix.set(i, j, *ratio);
+/// Which pairs of a set somebody has answered, read in one go over the judgments.
+class Said {
+public:
+    Said(const Decision& decision, const SetResult& entry, const Id& by)
+        : items_(entry.items), own_(items_.size() * items_.size()), agreed_(own_.size()) {
+        for (const auto& judgment : decision.judgments) {
+            if (judgment.set != entry.set || !(judgment.by.empty() || judgment.by == by)) continue;
+            const std::size_t a = index(judgment.a);
+            const std::size_t b = index(judgment.b);
+            if (a == items_.size() || b == items_.size()) continue;
+            auto& table = judgment.by == by ? own_ : agreed_;
+            table[a * items_.size() + b] = table[b * items_.size() + a] = true;
         }
     }
-    return matrix;
+    bool own(const ItemPair& pair) const { return own_[at(pair)]; }
+    bool agreed(const ItemPair& pair) const { return agreed_[at(pair)]; }
+
+private:
+    std::size_t index(const Id& item) const {
+        return static_cast<std::size_t>(std::find(items_.begin(), items_.end(), item) - items_.begin());
+    }
+    std::size_t at(const ItemPair& pair) const { return index(pair[0]) * items_.size() + index(pair[1]); }
+
+    const std::vector<Id>& items_;
+    std::vector<bool> own_;
+    std::vector<bool> agreed_;
+};
+
+bool of_options(const Decision& decision, const Id& set) {
+    const Node* node = find_node(decision.criteria, set);
+    return node != nullptr && node->is_leaf() && node->rate == RateBy::pairs;
+}
+
+/// What is known of a set to the one who is asked, as numbers.
+PairMatrix known(const Decision& decision, const SetResult& entry, const Id& by) {
+    const JudgedSet said =
+        JudgmentsBySet(decision).gather(entry.set, entry.items, of_options(decision, entry.set));
+    if (by.empty()) return group_matrix(said);
+    for (const auto& judge : said.judges) {
+        if (judge.person == by) return judge_matrix(judge, said.agreed);
+    }
+    return said.agreed;
+}
+
+PairMatrix::Pair places(const SetResult& entry, const ItemPair& pair) {
+    const auto index = [&](const Id& item) {
+        return static_cast<std::size_t>(std::find(entry.items.begin(), entry.items.end(), item) -
+                                        entry.items.begin());
+    };
+    return {index(pair[0]), index(pair[1])};
+}
+
+std::string answers(std::size_t count) {
+    return std::to_string(count) + (count == 1 ? " more answer" : " more answers");
 }
 
 } // namespace
@@ -65,8 +101,7 @@ SetResult own_entry(const RoomView& view, const Id& set) {
 
 std::vector<ItemPair> asked_pairs(const Decision& decision, const SetResult& entry, const Id& by) {
     const Person* person = find_person(decision, by);
-    const Node* node = find_node(decision.criteria, entry.set);
-    const bool options = node != nullptr && node->is_leaf() && node->rate == RateBy::pairs;
+    const bool options = of_options(decision, entry.set);
     const auto abstains = [&](const Id& item) {
         return person != nullptr && options &&
                std::find(person->abstains.begin(), person->abstains.end(), item) != person->abstains.end();
@@ -94,12 +129,11 @@ Progress progress_of(const Decision& decision, const SetResult& entry, const Id&
     const auto asked = asked_pairs(decision, entry, by);
     progress.asked = asked.size();
     progress.ended = finished_by(decision, entry.set, by) != nullptr;
+    const Said said(decision, entry, by);
     for (const auto& pair : asked) {
-        const bool own = standing_judgment(decision, entry.set, by, pair[0], pair[1]) != nullptr;
-        progress.any = progress.any || own;
-        const bool agreed = standing_judgment(decision, entry.set, Id{}, pair[0], pair[1]) != nullptr;
+        progress.any = progress.any || said.own(pair);
         const bool by_others = by.empty() && !holds(entry.missing, pair);
-        if (!own && !agreed && !by_others) progress.left.push_back(pair);
+        if (!said.own(pair) && !said.agreed(pair) && !by_others) progress.left.push_back(pair);
     }
     return progress;
 }
@@ -151,38 +185,40 @@ std::vector<ItemPair> left_for_hands(const Decision& decision, const SetResult& 
 
 std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Asking& asking,
                                   const std::optional<ItemPair>& from) {
-    const auto place = [&](const Id& item) {
-        return static_cast<std::size_t>(std::find(entry.items.begin(), entry.items.end(), item) -
-                                        entry.items.begin());
-    };
-    std::optional<std::size_t> star;
-    if (place(asking.star) < entry.items.size()) star = place(asking.star);
+    PairMatrix answered = known(view.decision, entry, asking.by);
     std::vector<PairMatrix::Pair> not_now;
-    for (std::size_t i = 0; i < entry.items.size(); ++i) {
-        for (std::size_t j = i + 1; j < entry.items.size(); ++j) {
-            const ItemPair pair{entry.items[i], entry.items[j]};
-            const bool shown = from && same_pair(*from, pair);
-            if (shown || holds(asking.skipped, pair) || !holds(asking.left, pair)) not_now.push_back({i, j});
-        }
+    for (const auto& pair : asked_pairs(view.decision, entry, Id{})) {
+        const auto [i, j] = places(entry, pair);
+        const bool wanted = holds(asking.left, pair);
+        if (wanted) answered.clear(i, j);
+        if (!wanted || holds(asking.skipped, pair) || (from && same_pair(*from, pair)))
+            not_now.push_back({i, j});
     }
-    const auto next = next_question(answered(view.decision, entry, asking.by, asking.left), star, not_now);
+    std::optional<std::size_t> star;
+    if (const std::size_t at = places(entry, {asking.star, asking.star})[0]; at < entry.items.size())
+        star = at;
+    const auto next = next_question(answered, star, not_now);
     if (!next) return std::nullopt;
     return ItemPair{entry.items[(*next)[0]], entry.items[(*next)[1]]};
 }
 
-std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress) {
-    if (progress.left.empty() || entry.from_points) return "";
-    const QuestionsNeeded needed = questions_needed(answered(decision, entry, entry.by, progress.left));
-    const bool all = decision.settings.method == Method::column_average; // Which needs every pair.
-    const std::size_t links = all ? entry.missing.size() : needed.to_connect;
-    const std::size_t firm = std::min(std::max(needed.to_firm_up, links), progress.left.size()) - links;
-    const std::string would = " would firm them up.";
-    if (links > 0) {
-        const std::string give = answers(links) + (links == 1 ? " gives weights" : " give weights");
-        return firm == 0 ? give + "." : give + "; " + std::to_string(firm) + " more" + would;
+std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress,
+                            const Id& by) {
+    if (progress.left.empty() || progress.points) return "";
+    const QuestionsNeeded needed = questions_needed(known(decision, entry, by));
+    // Averaged columns need every pair.
+    const bool all = decision.settings.method == Method::column_average;
+    const std::size_t give = all ? progress.left.size() : needed.to_connect;
+    const std::size_t firm = std::min(progress.left.size(), needed.to_firm_up);
+    const std::string more = firm > give ? std::to_string(firm - give) + " more would firm them up." : "";
+    if (give > 0) {
+        const std::string first = answers(give) + (give == 1 ? " gives weights" : " give weights");
+        return more.empty() ? first + "." : first + "; " + more;
     }
-    if (firm == 0) return "These answers give firm weights; more would check them.";
-    return "These answers give weights; " + std::to_string(firm) + " more" + would;
+    if (!more.empty()) return "These answers give weights; " + more;
+    const std::size_t left = progress.left.size();
+    return "These answers give firm weights; " + std::to_string(left) +
+           (left == 1 ? " pair is" : " pairs are") + " left.";
 }
 
 std::string enough_sentence(const RoomView& view, const SetResult& entry) {
@@ -218,20 +254,22 @@ std::string changed_ranges(const RoomView& view, const Judgment& judgment) {
 }
 
 bool ranges_changed(const RoomView& view, const SetResult& entry) {
-    std::vector<Id> who{Id{}};
-    if (!view.person.empty()) {
-        who.push_back(view.person);
-    } else if (!view.sealed()) {
-        for (const auto& person : view.decision.people) who.push_back(person.id);
-    }
-    for (const auto& pair : asked_pairs(view.decision, entry, Id{})) {
-        const Judgment* agreed = standing_judgment(view.decision, entry.set, Id{}, pair[0], pair[1]);
-        for (const auto& by : who) {
-            // What is agreed stands in place of what each person said.
-            if (agreed != nullptr && !by.empty()) continue;
-            const Judgment* judgment = standing_judgment(view.decision, entry.set, by, pair[0], pair[1]);
-            if (judgment != nullptr && !changed_ranges(view, *judgment).empty()) return true;
-        }
+    std::vector<std::pair<Id, std::string>> today;
+    for (const auto& item : entry.items)
+        today.emplace_back(item, range_at_stake(view.decision, view.results, entry.set, item));
+    const auto stands = [&](const Id& item, const std::string& then) {
+        return then.empty() || std::any_of(today.begin(), today.end(), [&](const auto& one) {
+                   return one.first == item && one.second == then;
+               });
+    };
+    const auto& judgments = view.decision.judgments;
+    for (auto j = judgments.rbegin(); j != judgments.rend(); ++j) {
+        if (j->set != entry.set || (stands(j->a, j->a_range) && stands(j->b, j->b_range))) continue;
+        const bool seen = j->by.empty() || j->by == view.person || (view.person.empty() && !view.sealed());
+        if (!seen || standing_judgment(view.decision, j->set, j->by, j->a, j->b) != &*j) continue;
+        // What is agreed stands in place of what each person said.
+        if (j->by.empty() || standing_judgment(view.decision, j->set, Id{}, j->a, j->b) == nullptr)
+            return true;
     }
     return false;
 }

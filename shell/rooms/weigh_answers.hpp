@@ -15,6 +15,10 @@ namespace steelyard {
 const Judgment* standing_judgment(const Decision& decision, const Id& set, const Id& by, const Id& a,
                                   const Id& b);
 
+inline bool sealed(const RoomView& view) {
+    return view.sealed();
+}
+
 /// The entry of a set that the one who answers may see: the group's where nobody does, else his own, and an
 /// empty one where he has not answered yet.
 SetResult own_entry(const RoomView& view, const Id& set);
@@ -55,13 +59,14 @@ struct Asking {
     std::vector<ItemPair> skipped; ///< For now.
 };
 
-/// The pair to ask next; none where nothing is left but what was skipped. With a star first the item named as
-/// mattering most against each other one. `from` is the pair shown now, if there is one.
+/// The pair to ask next, by the rule of core/judgment/next_question.hpp; none where nothing is left but what
+/// was skipped. `from` is the pair shown now, if there is one: answered a moment ago, or left.
 std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, const Asking& asking,
                                   const std::optional<ItemPair>& from);
 
 /// "2 more answers give weights; 5 more would firm them up." Empty where nothing is left.
-std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress);
+std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress,
+                            const Id& by);
 
 /// Whether what is open can still change first place, in words; empty where nobody asked or nothing is open.
 std::string enough_sentence(const RoomView& view, const SetResult& entry);

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 
+#include "shell/rooms/size_button.hpp"
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_matrix_plan.hpp"
 #include "shell/rooms/weigh_table.hpp"
@@ -68,7 +69,7 @@ std::optional<ItemPair> PairGrid::draw(Ui& ui, const RoomView& view, Actions& ac
     const bool known = i < entry.items.size() && j < entry.items.size() && i != j;
     const std::string words = known ? table.sentences(i, j) : std::string{};
     const float text_height = paragraph_height(inside.w - 10, words, Font::small);
-    const float most = std::max(2 * line_step(Font::small), inside.h * 0.34F);
+    const float most = std::max(2 * line_step(Font::small), inside.h * 0.26F);
     Box below = inside.take_bottom(std::clamp(text_height, 2 * line_step(Font::small), most), 6);
     const float legend = draw_mark_legend(ui, table, inside, false);
     if (legend > 0) draw_mark_legend(ui, table, inside.take_bottom(legend, 6), true);
@@ -91,7 +92,7 @@ void PairGrid::draw_head(Ui& ui, const RoomView& view, Actions& actions, const P
         const Box box = head.take_right(button_width(label, ButtonKind::link) + 4, 2);
         return button(ui, id, label, {box.x, box.y, box.w, text_button}, ButtonKind::quiet, enabled);
     };
-    if (act("grid-large", large_ ? "Smaller" : "Larger")) large_ = !large_;
+    if (size_button(ui, "grid-large", "the grid", large_, head)) large_ = !large_;
     if (act("grid-paste", "Paste", !view.read_only)) paste_.open({}, set_, view.person);
     if (act("grid-copy", "Copy")) copy_matrix(actions, table);
     const char* title = "All pairs of this set";

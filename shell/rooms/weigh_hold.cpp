@@ -3,6 +3,7 @@
 #include <algorithm>
 
 #include "core/decision/lookup.hpp"
+#include "shell/rooms/size_button.hpp"
 #include "shell/rooms/text_flow.hpp"
 #include "shell/rooms/weigh_hold_words.hpp"
 #include "shell/rooms/weigh_set_settings.hpp"
@@ -28,8 +29,10 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
     const Theme& theme = ui.look();
     const Card card(ui, box);
     Box inside = box.inset(16);
-    draw_text(ui, inside.take_top(28).at(), "Does it hold together?",
-              {.font = Font::strong, .ink = theme.quiet, .max_width = inside.w});
+    Box head = inside.take_top(28);
+    if (size_button(ui, "hold-large", "the card", large_, head)) large_ = !large_;
+    draw_text(ui, {head.x, head.y + 2}, "Does it hold together?",
+              {.font = Font::strong, .ink = theme.quiet, .max_width = head.w});
     ScrollArea area(ui, "words", inside);
     const Box in = area.inner();
     // The place of the scroll bar is kept free, so that nothing moves when it comes.
@@ -59,6 +62,7 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         }
     }
     area.reach(flow.y());
+    if (result) large_ = false; // The pair is on the arm.
     return result;
 }
 

@@ -18,6 +18,9 @@ public:
                                  Box box);
     void reset() { *this = {}; }
 
+    /// It asks for all the room there is.
+    bool large() const { return large_; }
+
 private:
     void draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) const;
@@ -25,6 +28,7 @@ private:
     Corrections corrections_;
     bool all_methods_ = false;
     bool settings_open_ = false;
+    bool large_ = false;
 };
 
 } // namespace steelyard

@@ -264,7 +264,7 @@ void PairCard::draw_progress(Ui& ui, const RoomView& view, Actions& actions, con
         draw_go_on(ui, view, actions, row);
     } else {
         const std::string enough = view.sealed() ? std::string() : enough_sentence(view, entry);
-        text = enough.empty() ? needed_sentence(d, entry, progress) : enough;
+        text = enough.empty() ? needed_sentence(d, entry, progress, view.person) : enough;
         const std::string finish = mine ? "Enough for me" : "That is all";
         const Box end = row.take_right(button_width(finish), 8);
         if (button(ui, "finish", finish, end, ButtonKind::plain, !view.read_only && progress.any)) {

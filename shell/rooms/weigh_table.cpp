@@ -234,8 +234,10 @@ private:
             const TextLook look{
                 .font = Font::small, .ink = theme_.quiet, .max_width = box.w - 6, .align = Align::centre};
             const std::string& name = pairs_.names()[c];
-            const auto lines = at_.numbered ? std::array<std::string, 2>{std::to_string(c + 1), name}
-                                            : gauge::two_lines(Font::small, name, box.w - 6);
+            const bool number_only = at_.numbered && at_.head < 2 * line;
+            const auto lines =
+                at_.numbered ? std::array<std::string, 2>{std::to_string(c + 1), number_only ? "" : name}
+                             : gauge::two_lines(Font::small, name, box.w - 6);
             const float y = box.y + (at_.head - line * (lines[1].empty() ? 1 : 2)) / 2;
             draw_text(ui_, {x, y}, lines[0], look);
             draw_text(ui_, {x, y + line}, lines[1], look);

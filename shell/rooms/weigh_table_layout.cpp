@@ -14,6 +14,7 @@ constexpr float widest = 92;
 constexpr float with_word = 58; ///< From this width on a word stands under the ratio.
 constexpr float low = 34;
 constexpr float high = 46;
+constexpr float low_table = 190;
 constexpr float number_width = 34; ///< Before a name at the left.
 
 } // namespace
@@ -26,18 +27,21 @@ TableLayout lay_out(const std::vector<std::string>& names, const Box& origin, co
     const auto count = static_cast<float>(at.n);
     float longest = 0;
     for (const auto& name : names) longest = std::max(longest, text_size(Font::body, name).x);
-    const float part = at.n <= 4 ? 0.42F : 0.34F;
-    at.names = std::floor(std::clamp(longest + number_width, 60.0F, std::max(84.0F, part * sight.w)));
+    // Names take a third, or what narrow cells leave of a small table as long as that is not much.
+    const float left = std::min(150.0F, sight.w - narrowest * count);
+    at.names =
+        std::floor(std::clamp(longest + number_width, 60.0F, std::max({84.0F, 0.34F * sight.w, left})));
     at.cell_w = std::floor(std::clamp((sight.w - at.names) / count, narrowest, widest));
-    at.head = 38;
-    const float room = (sight.h - at.head) / count;
-    at.roomy = at.cell_w >= with_word && room >= 40;
-    at.cell_h = at.roomy ? std::clamp(std::floor(room), 42.0F, high) : low;
     at.numbered = std::any_of(names.begin(), names.end(), [&](const std::string& name) {
         const auto lines = gauge::two_lines(Font::small, name, at.cell_w - 6);
         return text_size(Font::small, lines[0]).x > at.cell_w - 6 ||
                text_size(Font::small, lines[1]).x > at.cell_w - 6;
     });
+    // In a low table the numbers alone stand above the columns; the names are at the left.
+    at.head = at.numbered && sight.h < low_table ? 20 : 38;
+    const float room = (sight.h - at.head) / count;
+    at.roomy = at.cell_w >= with_word && room >= 40;
+    at.cell_h = at.roomy ? std::clamp(std::floor(room), 42.0F, high) : low;
     return at;
 }
 

@@ -84,10 +84,12 @@ TEST_CASE("sets of 3, 6, 9 and 15 items, of one and of eight judges, leave their
                     std::to_string(count) + "-items-" + (judges == 0 ? "agreed" : "eight-judges");
                 look(page, name, size);
                 if (size.width < 700) continue;
-                page.click("Larger", "button");
+                page.click("Enlarge the grid", "button");
                 look(page, name + "-large", size);
-                page.click("Smaller", "button");
+                page.click("Shrink the grid", "button");
                 look(page, name + "-small-again", size);
+                page.click("Enlarge the card", "button");
+                look(page, name + "-hold", size);
             }
         }
     }
