@@ -78,7 +78,7 @@ TEST_CASE("a set of six is judged by keys alone in at most sixty acts") {
     CHECK(said("c0", "c2") == 2);
     CHECK(said("c0", "c3") == 3);
     CHECK(said("c0", "c4") == 0.25);
-    CHECK(said("c4", "c5") == 5);
+    CHECK(d.judgments.size() == 15); // The rest in the order that tells most.
 }
 
 TEST_CASE("arrows move the poise by a step, with Shift by a tenth, and the ratio is typed as a fraction") {
