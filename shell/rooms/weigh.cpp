@@ -206,7 +206,10 @@ private:
             return;
         }
         if (hold_.large()) {
-            if (const auto pair = hold_.draw(ui, view, actions, entry, area)) pick(*pair);
+            if (const auto pair = hold_.draw(ui, view, actions, entry, area)) {
+                pick(*pair);
+                hold_.shrink(); // To the arm, where the pair is.
+            }
             return;
         }
         const float card = narrow ? 352.0f : std::clamp(area.h * 0.55f, 350.0f, 500.0f);

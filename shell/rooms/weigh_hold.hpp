@@ -20,6 +20,7 @@ public:
 
     /// It asks for all the room there is.
     bool large() const { return large_; }
+    void shrink() { large_ = false; }
 
 private:
     void draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);

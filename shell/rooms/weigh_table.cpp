@@ -39,7 +39,8 @@ public:
         area.reach_right(last.x);
         const auto now = chosen();
         if (now && state_.reveal) {
-            scroll_into_sight(at_.cell(*now), at_.names, at_.head);
+            // The page moves for who walks the grid, not for who answers at the arm.
+            scroll_into_sight(at_.cell(*now), at_.names, at_.head, state_.has_keyboard);
             state_.reveal = false;
         }
         draw_cells(now);

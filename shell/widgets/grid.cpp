@@ -258,7 +258,7 @@ Box area_in_sight() {
     return {inner.Min.x, inner.Min.y, inner.GetWidth(), inner.GetHeight()};
 }
 
-void scroll_into_sight(const Box& wanted, float covered_left, float covered_top) {
+void scroll_into_sight(const Box& wanted, float covered_left, float covered_top, bool page_too) {
     const Box sight = area_in_sight();
     const float left = wanted.x - (sight.x + covered_left);
     const float right = wanted.right() - sight.right();
@@ -268,6 +268,7 @@ void scroll_into_sight(const Box& wanted, float covered_left, float covered_top)
     const float by_y = top < 0 ? top : std::clamp(bottom, 0.0F, top);
     if (by_x != 0) ImGui::SetScrollX(ImGui::GetScrollX() + by_x);
     if (by_y != 0) ImGui::SetScrollY(ImGui::GetScrollY() + by_y);
+    if (!page_too) return;
     // On a small page this area stands in another one that is scrolled too. It is shown whole if it fits
     // there, so that what is covered by heads is seen with them.
     ImGuiWindow* around = ImGui::GetCurrentWindow()->ParentWindow;

@@ -58,7 +58,7 @@ void cell_ring(const Ui& ui, const Box& box);
 Box area_in_sight();
 
 /// Scrolls the current area so that `wanted` is in sight, in a view whose top and left edge are covered by so
-/// much.
-void scroll_into_sight(const Box& wanted, float covered_left, float covered_top);
+/// much; the page around it, too, unless told otherwise.
+void scroll_into_sight(const Box& wanted, float covered_left, float covered_top, bool page_too = true);
 
 } // namespace steelyard
