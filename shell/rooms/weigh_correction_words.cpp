@@ -125,4 +125,10 @@ std::string correction_label(const Decision& decision, const Id& set, const Id& 
            (by.empty() ? "" : " (" + person_name(decision, by) + ")");
 }
 
+std::string best_sentence(const PairCorrection& pair) {
+    if (!pair.best || !pair.cr_at_best) return {};
+    return "The value that fits best, with the others as they are: " + figure_text(*pair.best, 4) +
+           ", with which CR is " + figure_text(*pair.cr_at_best, 4) + ".";
+}
+
 } // namespace steelyard

@@ -53,4 +53,8 @@ std::vector<Edit> correction_edits(const RoomView& view, const Id& set, const Id
 std::string correction_label(const Decision& decision, const Id& set, const Id& by,
                              const std::vector<AnswerChange>& changes);
 
+/// "The value that fits best, with the others as they are: 0.4625, with which CR is 0.0824." Empty where it
+/// is not known.
+std::string best_sentence(const PairCorrection& pair);
+
 } // namespace steelyard

@@ -109,6 +109,8 @@ std::optional<ItemPair> Corrections::draw(Ui& ui, const RoomView& view, Actions&
     draw_step(ui, view, flow, list);
     flow.say(given_sentence(view, entry, pair, mean), Font::body, 0, 2);
     flow.say(implied_sentence(view, entry, pair));
+    const std::string best = best_sentence(pair);
+    if (!best.empty()) flow.say(best, Font::small, ui.look().quiet, 2);
     const std::string look = "Look at this pair";
     if (button(ui, "look", look, {flow.x(), flow.y() + 2, button_width(look), button_height}))
         result = ItemPair{pair.a, pair.b};

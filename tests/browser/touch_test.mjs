@@ -1,36 +1,12 @@
-// Fingers, tried on the probe. Chromium's driver touches the screen; in Firefox the events are synthesised.
+// Fingers, tried on the probe.
 
 import assert from 'node:assert/strict';
 
 import { probeFile } from './browsers.mjs';
 import { inEachBrowser } from './each_browser.mjs';
+import { touch } from './touch.mjs';
 
-inEachBrowser('touch', (test, name) => {
-    /// Fingers at some places: `kind` is down, move or up; `fingers` are [id, x, y] each.
-    async function touch(page, kind, fingers) {
-        if (name === 'chromium') {
-            page.driver ??= await page.tab.createCDPSession();
-            page.down ??= new Map();
-            for (const [id, x, y] of fingers) {
-                kind === 'up' ? page.down.delete(id) : page.down.set(id, { id, x, y });
-            }
-            const type = { down: 'touchStart', move: 'touchMove', up: 'touchEnd' }[kind];
-            await page.driver.send('Input.dispatchTouchEvent', { type, touchPoints: [...page.down.values()] });
-        } else {
-            await page.tab.evaluate(
-                (type, points) => {
-                    const canvas = document.getElementById('picture');
-                    canvas.setPointerCapture = () => {}; // refused for pointers that the browser does not know
-                    for (const [pointerId, clientX, clientY] of points) {
-                        const init = { pointerId, clientX, clientY, pointerType: 'touch', bubbles: true, cancelable: true };
-                        canvas.dispatchEvent(new PointerEvent(type, { ...init, isPrimary: pointerId === 1 }));
-                    }
-                },
-                'pointer' + kind, fingers
-            );
-        }
-    }
-
+inEachBrowser('touch', (test) => {
     const wait = (milliseconds) => new Promise((resolve) => setTimeout(resolve, milliseconds));
 
     test('a tap presses', async (open) => {
