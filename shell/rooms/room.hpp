@@ -58,7 +58,8 @@ public:
     /// Hands over to a person, who says first that it is he; or to nobody, where `person` is empty.
     void answer_as(Id person) { answers = {std::move(person), true}; }
 
-    /// Another way of answering, with nobody chosen. Answers that are sealed are opened only after a question.
+    /// Another way of answering, with nobody chosen. Answers that are sealed are opened only after a
+    /// question.
     void answer_by(Answering way) { answering = way; }
 
     /// Looks into the answers of `by` (empty: the group) in a set, a slice in each frame, as long as it is

@@ -15,7 +15,8 @@ Decision judged_set(const std::vector<std::string>& names, const std::vector<dou
 /// The same judgments said by a person, who is added (ids p0, p1 …) with this name.
 void add_judge(Decision& decision, const std::string& name, const std::vector<double>& upper);
 
-/// Five criteria in which one answer contradicts the others: Floor space against Noise is 1/6. It closes a circle.
+/// Five criteria in which one answer contradicts the others: Floor space against Noise is 1/6. It closes a
+/// circle.
 Decision contradicting_set();
 
 } // namespace steelyard::testing
