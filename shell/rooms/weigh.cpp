@@ -49,7 +49,10 @@ public:
         }
     }
 
-    void show(const Id& set) override { set_ = set; }
+    void show(const Id& set) override {
+        set_ = set;
+        part_ = WeighPart::arm;
+    }
 
     bool paste(const std::string& text, const RoomView& view, Actions& actions) override {
         return grid_.paste(text, view, actions, set_);
@@ -61,10 +64,9 @@ public:
         card_.reset();
         together_.reset();
         hands_.reset();
-        revealed_.clear();
-        everybody_ = false;
         differ_.reset();
-        differing_ = false;
+        revealed_.clear();
+        part_ = WeighPart::arm;
         grid_.reset();
         hold_.reset();
         points_.reset();
@@ -140,41 +142,30 @@ private:
         const float head = head_height(view, set_, area.w);
         Box free{area.x, area.y, 0, 0};
         if (head > 0) {
-            const bool before = everybody_;
-            free = draw_head(ui, view, actions, group, everybody_, area.take_top(head, 10));
-            if (everybody_ && !before) together_.fresh();
-            if (before != everybody_) fresh();
+            const WeighPart before = part_;
+            free = draw_head(ui, view, actions, group, part_, area.take_top(head, 10));
+            if (part_ != before) {
+                fresh();
+                together_.fresh();
+            }
         }
         const bool nobody = view.sealed() && view.person.empty();
         const bool open = view.answering == Answering::agreed && view.person.empty();
-        const bool together = (nobody && revealed_.contains(set_)) || (open && everybody_);
+        const bool together = (nobody && revealed_.contains(set_)) || (open && part_ == WeighPart::everybody);
         const bool hands = view.answering == Answering::hands;
-        const bool may_differ = open && !everybody_ && DifferPage::has_something(view);
-        if (!may_differ) differing_ = false;
+        if (open && part_ == WeighPart::differ && DifferPage::has_something(view)) {
+            if (const auto chosen = differ_.draw(ui, view, actions, area))
+                show_pair(chosen->set, chosen->pair);
+            return;
+        }
         // What is read across a room stands alone.
         if (!narrow && (together || hands) && free.w >= 150) {
             draw_set_choice(ui, view, {free.x, free.y + 2, std::min(free.w, 320.0f), 34});
         } else if (narrow || together || hands) {
-            Box row = area.take_top(36, 10);
-            if (may_differ)
-                draw_differ_switch(ui, row.take_right(std::min(row.w * 0.5f, differ_width()), 10));
-            draw_set_choice(ui, view, row);
+            draw_set_choice(ui, view, area.take_top(36, 10));
         } else {
-            Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
-            if (may_differ) draw_differ_switch(ui, list.take_bottom(36, 10));
-            if (const auto set = draw_set_list(ui, view, set_, revealed_, list)) {
-                set_ = *set;
-                differing_ = false;
-            }
-        }
-        if (differing_) {
-            if (const auto chosen = differ_.draw(ui, view, actions, area)) {
-                set_ = chosen->set;
-                shown_set_ = chosen->set;
-                pick(chosen->pair);
-                differing_ = false;
-            }
-            return;
+            const Box list = area.take_left(std::clamp(area.w * 0.23f, 170.0f, 230.0f), 16);
+            if (const auto set = draw_set_list(ui, view, set_, revealed_, list)) set_ = *set;
         }
         if (together && !entry.from_points) {
             together_.draw(ui, view, actions, group, pair_, area);
@@ -187,15 +178,6 @@ private:
         } else {
             draw_work(ui, view, actions, entry, area, narrow);
         }
-    }
-
-    static constexpr const char* differ_label = "Where you disagree";
-    static float differ_width() { return button_width(differ_label); }
-
-    /// To the page of disagreements and back.
-    void draw_differ_switch(Ui& ui, const Box& box) {
-        if (button(ui, "differ", differing_ ? "Back to the arm" : differ_label, box))
-            differing_ = !differing_;
     }
 
     void draw_work(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, Box area,
@@ -213,7 +195,8 @@ private:
             return;
         }
         const float card = narrow ? 352.0f : std::clamp(area.h * 0.55f, 350.0f, 500.0f);
-        card_.draw(ui, view, actions, entry, pair_, area.take_top(card, 12));
+        const float more = card_.more_height(view, entry, pair_);
+        card_.draw(ui, view, actions, entry, pair_, area.take_top(card + more, 12));
         Box below = area;
         Box grid = below;
         Box words = below;
@@ -230,6 +213,16 @@ private:
         if (const auto pair = hold_.draw(ui, view, actions, entry, words)) pick(*pair);
     }
 
+    /// A pair of any set, with everybody's answers to it.
+    void show_pair(const Id& set, const ItemPair& pair) {
+        set_ = set;
+        shown_set_ = set;
+        pair_ = pair;
+        part_ = WeighPart::everybody;
+        fresh();
+        together_.fresh(true);
+    }
+
     void pick(const ItemPair& pair) {
         pair_ = pair;
         card_.fresh(true);
@@ -239,7 +232,6 @@ private:
     TogetherCard together_;
     HandsCard hands_;
     DifferPage differ_;
-    bool differing_ = false; ///< The page of disagreements is shown.
     PairGrid grid_;
     HoldCard hold_;
     PointsCard points_;
@@ -247,8 +239,8 @@ private:
     Id shown_set_; ///< The set the pair belongs to, and who is asked.
     Id shown_person_;
     Answering shown_way_ = Answering::agreed;
-    std::set<Id> revealed_;  ///< Sets opened while the others are sealed.
-    bool everybody_ = false; ///< Everybody's answers are shown.
+    std::set<Id> revealed_; ///< Sets opened while the others are sealed.
+    WeighPart part_ = WeighPart::arm;
     int last_frame_ = -2;
     ItemPair pair_;
 };

@@ -17,6 +17,8 @@ namespace {
 
 constexpr float control_height = 34;
 constexpr float progress_height = 38;
+constexpr float line_height = 18;
+constexpr float ranges_height = 42; ///< Two lines and the button beside them.
 
 /// What the keys do, as much of it as there is room for.
 std::string keys_text(float width) {
@@ -34,6 +36,13 @@ std::string keys_text(float width) {
         if (text_size(Font::small, text).x <= width) return text;
     }
     return "";
+}
+
+/// Of the own judgment of a pair, or else of the agreed one: on which other ranges it was made.
+std::string changed_words(const RoomView& view, const Id& set, const ItemPair& pair) {
+    const Judgment* judgment = standing_judgment(view.decision, set, view.person, pair[0], pair[1]);
+    if (judgment == nullptr) judgment = standing_judgment(view.decision, set, Id{}, pair[0], pair[1]);
+    return judgment == nullptr ? std::string() : changed_ranges(view, *judgment);
 }
 
 } // namespace
@@ -141,31 +150,35 @@ void PairCard::draw_words(Ui& ui, const RoomView& view, Actions& actions, const 
             "Agreed in the room: " + pair_sentence(d, set_, pair[0], pair[1], *agreed) +
                 ". That stands in place of your answer.",
             {.font = Font::small, .ink = theme.brass_ink, .max_width = inside.w, .align = Align::centre});
-        inside.take_top(18);
+        inside.take_top(line_height);
     }
-    const Judgment* shown = own;
-    if (shown == nullptr) shown = standing_judgment(d, set_, Id{}, pair[0], pair[1]);
-    const std::string changed = shown == nullptr ? std::string() : changed_ranges(view, *shown);
+    const std::string changed = changed_words(view, set_, pair);
     if (!changed.empty()) {
-        Box row = inside;
-        const bool mine = own != nullptr && !view.read_only;
-        if (mine) {
+        Box row = inside.take_top(ranges_height);
+        if (own != nullptr && !view.read_only) {
             const Box holds = row.take_right(button_width("Still holds"), 10);
-            if (button(ui, "still-holds", "Still holds", {holds.x, holds.y, holds.w, 28})) {
-                Judgment again = judgment_of(view, set_, view.person, {own->a, own->b}, own->ratio);
-                actions.edit(Enter<Judgment>{std::move(again)});
+            if (button(ui, "still-holds", "Still holds", {holds.x, holds.y + 4, holds.w, 30})) {
+                actions.edit(
+                    Enter<Judgment>{judgment_of(view, set_, view.person, {own->a, own->b}, own->ratio)});
                 ui.focus_next = "arm";
             }
         }
-        const float used =
-            draw_paragraph(ui, row.at(), row.w, changed, {.font = Font::small, .ink = theme.brass_ink});
-        inside.take_top(std::max(used, mine ? 28.0f : 0.0f) + 4);
+        draw_paragraph(ui, row.at(), row.w, changed, {.font = Font::small, .ink = theme.brass_ink});
     }
     if (own != nullptr && !own->note.empty() && !remark_open_) {
         draw_text(ui, {inside.x + inside.w / 2, inside.y}, "Remark: " + own->note,
                   {.font = Font::small, .ink = theme.quiet, .max_width = inside.w, .align = Align::centre});
-        inside.take_top(18);
+        inside.take_top(line_height);
     }
+}
+
+float PairCard::more_height(const RoomView& view, const SetResult& entry, const ItemPair& pair) const {
+    const Judgment* own = standing_judgment(view.decision, entry.set, view.person, pair[0], pair[1]);
+    float more = changed_words(view, entry.set, pair).empty() ? 0 : ranges_height;
+    if (own != nullptr && !own->note.empty()) more += line_height;
+    if (!view.person.empty() && said_ratio(view.decision, entry.set, Id{}, pair[0], pair[1]))
+        more += line_height;
+    return more;
 }
 
 void PairCard::draw_remark(Ui& ui, const RoomView& view, Actions& actions, const Judgment* own, Box& row) {

@@ -19,6 +19,9 @@ public:
     void draw(Ui& ui, const RoomView& view, Actions& actions, const SetResult& entry, ItemPair& pair,
               Box box);
 
+    /// Height the card takes beyond what every pair does: for what is said about this one.
+    float more_height(const RoomView& view, const SetResult& entry, const ItemPair& pair) const;
+
     /// Another pair is shown: the arm takes the keyboard, and with `bring_in` is scrolled into sight.
     void fresh(bool bring_in = false);
 

@@ -4,6 +4,7 @@
 
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/weigh_apart.hpp"
+#include "shell/rooms/weigh_differ.hpp"
 #include "shell/sentences.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/panels.hpp"
@@ -59,7 +60,7 @@ float head_height(const RoomView& view, const Id& set, float width) {
     return two_rows(view, set, width) ? 2 * row_height + row_gap : row_height;
 }
 
-Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, bool& together,
+Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, WeighPart& part,
               Box box) {
     if (view.decision.people.empty()) return {box.x, box.y, 0, 0};
     Box first = box.take_top(row_height, row_gap);
@@ -71,7 +72,7 @@ Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& g
     const std::size_t chosen = open_person ? 3 : static_cast<std::size_t>(view.answering);
     if (const auto way = choice(ui, "answering-way", "How answers are given",
                                 {"Agreed in the room", "Each alone", "Show of hands"}, chosen, ways)) {
-        together = false;
+        part = WeighPart::arm;
         const auto next = static_cast<Answering>(*way);
         if (next == view.answering)
             actions.answer_as({});
@@ -81,11 +82,16 @@ Box draw_head(Ui& ui, const RoomView& view, Actions& actions, const SetResult& g
     Box seat = stacked ? box : first;
     if (!view.person.empty()) {
         draw_seat(ui, view, actions, seat);
-    } else if (view.answering == Answering::agreed && anybody(view, group.set) && seat.w > 120) {
-        const std::string label = together ? "Back to the arm" : "Everybody's answers";
-        const Box toggle = seat.take_right(std::min(button_width(label), seat.w), 14);
-        if (button(ui, "together", label, {toggle.x, toggle.y + 2, toggle.w, 34}, ButtonKind::plain))
-            together = !together;
+    } else if (view.answering == Answering::agreed) {
+        const auto turn_to = [&](const char* id, const char* label, WeighPart to) {
+            const Box place = seat.take_right(std::min(button_width(label), seat.w), 10);
+            if (button(ui, id, label, {place.x, place.y + 2, place.w, 34}, ButtonKind::plain)) part = to;
+        };
+        if (part != WeighPart::arm) turn_to("part/arm", "Back to the arm", WeighPart::arm);
+        if (part != WeighPart::differ && DifferPage::has_something(view))
+            turn_to("part/differ", "Where you disagree", WeighPart::differ);
+        if (part != WeighPart::everybody && anybody(view, group.set))
+            turn_to("part/everybody", "Everybody's answers", WeighPart::everybody);
     }
     return stacked ? Box{first.x, first.y, 0, 0} : seat;
 }

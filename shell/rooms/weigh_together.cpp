@@ -17,8 +17,9 @@ constexpr float control_height = 36;
 
 } // namespace
 
-void TogetherCard::fresh() {
+void TogetherCard::fresh(bool keep) {
     fresh_ = true;
+    keep_ = keep;
     focus_ = true;
 }
 
@@ -127,7 +128,8 @@ void TogetherCard::draw(Ui& ui, const RoomView& view, Actions& actions, const Se
     if (fresh_ || other_set) {
         // Kept while it is looked through: settling a pair does not throw the others about.
         order_ = most_disputed_first(view, group);
-        if (!order_.empty()) pair = order_.front();
+        if (!order_.empty() && !keep_) pair = order_.front();
+        keep_ = false;
         proposal_.reset();
         memory_ = {};
         focus_ = true;

@@ -14,8 +14,8 @@ public:
     /// `pair` is the one shown and is moved on here. `group`: the group's entry of the set.
     void draw(Ui& ui, const RoomView& view, Actions& actions, const SetResult& group, ItemPair& pair,
               Box box);
-    /// The set is shown anew.
-    void fresh();
+    /// The set is shown anew, from the most disputed pair on, or with `keep` from the pair that is shown.
+    void fresh(bool keep = false);
     void reset() { *this = TogetherCard{}; }
 
 private:
@@ -31,6 +31,7 @@ private:
     ArmMemory memory_;
     bool off_ = false;
     bool fresh_ = true;
+    bool keep_ = false;
     bool focus_ = true;
 };
 

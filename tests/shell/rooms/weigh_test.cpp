@@ -2,6 +2,7 @@
 
 #include "core/decision/read.hpp"
 #include "core/decision/write.hpp"
+#include "core/results/solve.hpp"
 #include "shell/rooms/weigh_model.hpp"
 #include "tests/shell/support/headless.hpp"
 #include "tests/shell/support/ledger_checks.hpp"
@@ -74,14 +75,14 @@ TEST_CASE("a set of six is judged by keys alone in at most sixty acts") {
     const auto said = [&](const char* a, const char* b) {
         return said_ratio(d, "goal", "", a, b).value_or(0);
     };
+    // A star around the first item, then what tells most.
     CHECK(said("c0", "c1") == 1);
     CHECK(said("c0", "c2") == 2);
     CHECK(said("c0", "c3") == 3);
     CHECK(said("c0", "c4") == 0.25);
-    for (int i = 0; i < 6; ++i) {
-        for (int j = i + 1; j < 6; ++j) // The rest in the order that tells most.
-            CHECK(said(("c" + std::to_string(i)).c_str(), ("c" + std::to_string(j)).c_str()) != 0);
-    }
+    CHECK(said("c0", "c5") == 5);
+    CHECK(d.judgments.size() == 15 + 4); // A digit and its X are two entries; the last one stands.
+    CHECK(solve(d).sets.front().missing.empty());
 }
 
 TEST_CASE("arrows move the poise by a step, with Shift by a tenth, and the ratio is typed as a fraction") {

@@ -54,11 +54,13 @@ double WeighPage::said(const std::string& a, const std::string& b, const std::st
 }
 
 bool WeighPage::says(const std::string& part) const {
-    const auto& items = ledger().items();
-    return std::any_of(items.begin(), items.end(), [&](const LedgerItem& item) {
-        return item.visible &&
-               (item.label.find(part) != std::string::npos || item.value.find(part) != std::string::npos);
-    });
+    std::string all; // Sentences broken into lines are read across them.
+    for (const auto& item : ledger().items()) {
+        if (!item.visible) continue;
+        all += item.label + " ";
+        if (item.value.find(part) != std::string::npos) return true;
+    }
+    return all.find(part) != std::string::npos;
 }
 
 void WeighPage::choose(const std::string& list, const std::string& label) {
