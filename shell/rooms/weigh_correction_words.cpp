@@ -76,9 +76,10 @@ std::string matters_sentence(const RoomView& view, const Id& set, const MattersA
     switch (matters.matters) {
     case Matters::proven_no: return corrected + option_name(view.decision, first) + " stays first.";
     case Matters::not_known:
-        return std::string(several ? "Whether other answers" : "Whether another answer") +
-               " here could change first place is not known" +
-               (matters.why.empty() ? "." : ": " + matters.why);
+        return "Whether " +
+               (several ? "other answers to these " + std::to_string(matters.pairs.size()) + " pairs"
+                        : std::string("another answer to this pair")) +
+               " could change first place is not known" + (matters.why.empty() ? "." : ": " + matters.why);
     case Matters::found_yes: break;
     }
     std::vector<std::string> with;

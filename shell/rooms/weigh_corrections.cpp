@@ -305,8 +305,10 @@ std::optional<ItemPair> Corrections::draw_whose(Ui& ui, const RoomView& view, Ac
         const std::string who = person.empty() ? "Answer for the room" : person_name(d, person);
         const std::string words = brief_pair(d, entry.set, pair.a, pair.b, ratio);
         const float width = flow.width() - 24;
-        const float height = line_step(Font::strong) + paragraph_height(width, words, Font::small) + 12;
-        const Box row = flow.next(height, 4);
+        const float name = text_size(Font::strong, who).x;
+        const bool one_line = name + 16 + text_size(Font::small, words).x <= width;
+        const float more = one_line ? 0 : paragraph_height(width, words, Font::small);
+        const Box row = flow.next(line_step(Font::strong) + more + 12, 4);
         ImGui::GetWindowDrawList()->AddRect(row.at(), row.end(), theme.edge, 6);
         const std::string label = person.empty() ? who : "Look at the answer of " + who;
         if (press_area(ui, "whose/" + person, label, row, "button", words)) {
@@ -315,8 +317,11 @@ std::optional<ItemPair> Corrections::draw_whose(Ui& ui, const RoomView& view, Ac
         }
         draw_text(ui, {row.x + 12, row.y + 6}, who,
                   {.font = Font::strong, .ink = theme.steel, .max_width = width});
-        draw_paragraph(ui, {row.x + 12, row.y + 6 + line_step(Font::strong)}, width, words,
-                       {.font = Font::small, .ink = theme.quiet});
+        const TextLook quiet{.font = Font::small, .ink = theme.quiet};
+        if (one_line)
+            draw_text(ui, {row.x + 12 + name + 16, row.y + 8}, words, quiet);
+        else
+            draw_paragraph(ui, {row.x + 12, row.y + 6 + line_step(Font::strong)}, width, words, quiet);
     }
     flow.space(4);
     return result;
