@@ -63,7 +63,6 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         }
     }
     area.reach(flow.y());
-    if (result) large_ = false; // The pair is on the arm.
     return result;
 }
 
