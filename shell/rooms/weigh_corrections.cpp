@@ -8,6 +8,7 @@
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_hold_words.hpp"
 #include "shell/rooms/weigh_pairs.hpp"
+#include "shell/sentences.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/icon_button.hpp"
 #include "shell/widgets/panels.hpp"
@@ -46,6 +47,10 @@ bool choice_row(Ui& ui, const std::string& id, const std::string& title, const s
 
 std::string joined(const std::string& a, const std::string& b) {
     return a.empty() ? b : b.empty() ? a : a + " \xC2\xB7 " + b;
+}
+
+std::string joined_sentences(const std::string& a, const std::string& b) {
+    return b.empty() ? a : a + " " + b;
 }
 
 /// What stands first is known, and what could stand there instead begins to be.
@@ -173,13 +178,14 @@ std::vector<Corrections::Choice> Corrections::choices(const RoomView& view, cons
                    {},
                    false};
         bool own = true;
+        std::vector<std::string> what;
         for (const auto& change : fewest.changes) {
             own = own && change.said_by == view.person;
-            all.more += brief_pair(d, entry.set, change.a, change.b, change.to) + " (now " +
-                        ratio_text(change.to >= 1 ? change.given : 1 / change.given) + "). ";
+            what.push_back(brief_pair(d, entry.set, change.a, change.b, change.to) + " (now " +
+                           ratio_text(change.to >= 1 ? change.given : 1 / change.given) + ")");
             all.changes.push_back({change.a, change.b, change.given, change.to});
         }
-        all.more += lead_then(view, fewest.then);
+        all.more = joined_sentences(listed(what, 10) + ".", lead_then(view, fewest.then));
         if (own) list.push_back(std::move(all));
     }
     list.push_back({"correction/leave",

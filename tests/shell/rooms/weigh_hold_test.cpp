@@ -286,13 +286,14 @@ TEST_CASE("the fewest changes, if several, are made together in one act") {
     fewest.changes = {{"c1", "c3", "", 1.0 / 6, 2}, {"c0", "c2", "", 4, 3}, {"c2", "c3", "", 2, .5}};
     hold.page.examination->matters_fewest = MattersAnswer{.matters = Matters::not_known,
                                                           .pairs = {{"c1", "c3"}, {"c0", "c2"}, {"c2", "c3"}},
-                                                          .why = "too many cases."};
+                                                          .why = "Too many cases."};
     hold.page.frame(2);
     CHECK(hold.says("Three changes found; fewer may do."));
     CHECK(hold.says(
-        "Whether other answers to these 3 pairs could change first place is not known: too many cases."));
+        "Whether other answers to these 3 pairs could change first place is not known. Too many cases."));
     hold.page.click("Change 3 answers together", "radio");
-    CHECK(hold.says("Floor space 2 times Noise (now 1/6). Throughput 3 times Ease of use (now 4)."));
+    CHECK(hold.says("Floor space 2 times Noise (now 1/6), Throughput 3 times Ease of use (now 4) and Noise 2 "
+                    "times Ease of use (now 1/2)."));
     hold.page.click("Make these 3 changes", "button");
     const Decision& now = hold.page.decision();
     CHECK(said_ratio(now, "goal", "", "c1", "c3") == 2);
