@@ -11,6 +11,8 @@
 namespace steelyard {
 namespace {
 
+constexpr std::size_t most_named = 6; ///< Pairs in one sentence.
+
 std::string number_word(std::size_t n) {
     static constexpr std::array words{"No",   "One", "Two",   "Three", "Four",
                                       "Five", "Six", "Seven", "Eight", "Nine"};
@@ -76,16 +78,17 @@ std::string matters_sentence(const RoomView& view, const Id& set, const MattersA
     switch (matters.matters) {
     case Matters::proven_no: return corrected + option_name(view.decision, first) + " stays first.";
     case Matters::not_known:
-        return std::string(several ? "Whether other answers" : "Whether another answer") +
-               " here could change first place is not known" +
-               (matters.why.empty() ? "." : ": " + matters.why);
+        return "Whether " +
+               (several ? "other answers to these " + std::to_string(matters.pairs.size()) + " pairs"
+                        : std::string("another answer to this pair")) +
+               " could change first place is not known." + (matters.why.empty() ? "" : " " + matters.why);
     case Matters::found_yes: break;
     }
     std::vector<std::string> with;
     for (const auto& answer : matters.answers)
         with.push_back(brief_pair(view.decision, set, answer.a, answer.b, answer.ratio));
     return std::string(several ? "Together they matter: with " : "It matters who is right: with ") +
-           listed(with, with.size()) + ", " + option_name(view.decision, matters.first_then) +
+           listed(with, most_named) + ", " + option_name(view.decision, matters.first_then) +
            " would be first.";
 }
 
@@ -121,7 +124,7 @@ std::string correction_label(const Decision& decision, const Id& set, const Id& 
         what.push_back(item_name(decision, set, change.a) + " against " + item_name(decision, set, change.b) +
                        ": " + ratio_text(change.given) + " to " + ratio_text(change.to));
     }
-    return "Corrected " + listed(what, what.size()) +
+    return "Corrected " + listed(what, most_named) +
            (by.empty() ? "" : " (" + person_name(decision, by) + ")");
 }
 

@@ -8,6 +8,7 @@
 #include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_hold_words.hpp"
 #include "shell/rooms/weigh_pairs.hpp"
+#include "shell/sentences.hpp"
 #include "shell/widgets/controls.hpp"
 #include "shell/widgets/icon_button.hpp"
 #include "shell/widgets/panels.hpp"
@@ -46,6 +47,10 @@ bool choice_row(Ui& ui, const std::string& id, const std::string& title, const s
 
 std::string joined(const std::string& a, const std::string& b) {
     return a.empty() ? b : b.empty() ? a : a + " \xC2\xB7 " + b;
+}
+
+std::string joined_sentences(const std::string& a, const std::string& b) {
+    return b.empty() ? a : a + " " + b;
 }
 
 /// What stands first is known, and what could stand there instead begins to be.
@@ -175,13 +180,14 @@ std::vector<Corrections::Choice> Corrections::choices(const RoomView& view, cons
                    {},
                    false};
         bool own = true;
+        std::vector<std::string> what;
         for (const auto& change : fewest.changes) {
             own = own && change.said_by == view.person;
-            all.more += brief_pair(d, entry.set, change.a, change.b, change.to) + " (now " +
-                        ratio_text(change.to >= 1 ? change.given : 1 / change.given) + "). ";
+            what.push_back(brief_pair(d, entry.set, change.a, change.b, change.to) + " (now " +
+                           ratio_text(change.to >= 1 ? change.given : 1 / change.given) + ")");
             all.changes.push_back({change.a, change.b, change.given, change.to});
         }
-        all.more += lead_then(view, fewest.then);
+        all.more = joined_sentences(listed(what, 10) + ".", lead_then(view, fewest.then));
         if (own) list.push_back(std::move(all));
     }
     list.push_back({"correction/leave",
@@ -307,8 +313,10 @@ std::optional<ItemPair> Corrections::draw_whose(Ui& ui, const RoomView& view, Ac
         const std::string who = person.empty() ? "Answer for the room" : person_name(d, person);
         const std::string words = brief_pair(d, entry.set, pair.a, pair.b, ratio);
         const float width = flow.width() - 24;
-        const float height = line_step(Font::strong) + paragraph_height(width, words, Font::small) + 12;
-        const Box row = flow.next(height, 4);
+        const float name = text_size(Font::strong, who).x;
+        const bool one_line = name + 16 + text_size(Font::small, words).x <= width;
+        const float more = one_line ? 0 : paragraph_height(width, words, Font::small);
+        const Box row = flow.next(line_step(Font::strong) + more + 12, 4);
         ImGui::GetWindowDrawList()->AddRect(row.at(), row.end(), theme.edge, 6);
         const std::string label = person.empty() ? who : "Look at the answer of " + who;
         if (press_area(ui, "whose/" + person, label, row, "button", words)) {
@@ -317,8 +325,11 @@ std::optional<ItemPair> Corrections::draw_whose(Ui& ui, const RoomView& view, Ac
         }
         draw_text(ui, {row.x + 12, row.y + 6}, who,
                   {.font = Font::strong, .ink = theme.steel, .max_width = width});
-        draw_paragraph(ui, {row.x + 12, row.y + 6 + line_step(Font::strong)}, width, words,
-                       {.font = Font::small, .ink = theme.quiet});
+        const TextLook quiet{.font = Font::small, .ink = theme.quiet};
+        if (one_line)
+            draw_text(ui, {row.x + 12 + name + 16, row.y + 8}, words, quiet);
+        else
+            draw_paragraph(ui, {row.x + 12, row.y + 6 + line_step(Font::strong)}, width, words, quiet);
     }
     flow.space(4);
     return result;

@@ -14,7 +14,7 @@
 namespace steelyard {
 namespace {
 
-constexpr std::size_t most_circles = 6;
+constexpr std::size_t most_circles = 4;
 constexpr float weight_line = 25;
 constexpr float percent_width = 62;
 
@@ -44,10 +44,11 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
     if (!hidden_while_sealed(view, entry)) {
         actions.examine(entry.set, entry.by);
         flow.space(2);
-        for (const auto& circle : circle_sentences(view.decision, entry, most_circles))
-            flow.say(circle, Font::body, 0, 2);
-        if (!entry.cycles.empty()) flow.space(6);
+        // Over the limit, what to correct comes first; the circles go with it.
+        const bool over = over_limit(view.decision, entry);
+        if (!over) draw_circles(ui, view, entry, flow);
         result = corrections_.draw(ui, view, actions, entry, flow);
+        if (over) draw_circles(ui, view, entry, flow);
         if (entry.weights) draw_weights(ui, view, entry, flow);
         draw_terms(ui, view, entry, flow);
         draw_set_settings(ui, view, actions, settings_open_, flow);
@@ -62,8 +63,25 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         }
     }
     area.reach(flow.y());
-    if (result) large_ = false; // The pair is on the arm.
     return result;
+}
+
+void HoldCard::draw_circles(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) {
+    if (entry.cycles.empty()) return;
+    flow.space(4);
+    if (over_limit(view.decision, entry))
+        flow.say(entry.cycles.size() == 1 ? "Three answers run in a circle" : "Some answers run in circles",
+                 Font::strong, ui.look().red, 2);
+    const std::size_t most = all_circles_ ? entry.cycles.size() : most_circles;
+    for (const auto& circle : circle_sentences(view.decision, entry, most))
+        flow.say(circle, Font::body, 0, 2);
+    flow.space(6);
+    if (entry.cycles.size() <= most_circles) return;
+    const char* label = all_circles_ ? "Only the first circles" : "Name all circles";
+    const Box row = flow.next(30, 4);
+    if (button(ui, "all-circles", label, {row.x - 6, row.y, button_width(label, ButtonKind::link) + 4, 28},
+               ButtonKind::quiet))
+        all_circles_ = !all_circles_;
 }
 
 void HoldCard::draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) {
@@ -71,7 +89,7 @@ void HoldCard::draw_weights(Ui& ui, const RoomView& view, const SetResult& entry
     const Decision& d = view.decision;
     flow.space(6);
     flow.say("What these answers give", Font::strong, theme.quiet);
-    const float name_width = std::min(flow.width() * 0.46F, 190.0F);
+    const float name_width = std::min(flow.width() * 0.46F, 300.0F);
     for (std::size_t i = 0; i < entry.items.size(); ++i) {
         const Box row = flow.next(weight_line, 0);
         const double weight = (*entry.weights)[i];

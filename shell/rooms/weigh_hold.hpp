@@ -23,11 +23,13 @@ public:
     void shrink() { large_ = false; }
 
 private:
+    void draw_circles(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) const;
 
     Corrections corrections_;
     bool all_methods_ = false;
+    bool all_circles_ = false;
     bool settings_open_ = false;
     bool large_ = false;
 };

@@ -90,8 +90,12 @@ std::optional<std::string> edit_text(Ui& ui, std::string_view id, std::string_vi
     }
     const float padding = std::max(2.0f, (std::min(box.h, 36.0f) - font_size(Font::body)) / 2);
     ImGui::PushStyleVar(ImGuiStyleVar_FramePadding, {10, padding});
-    const ImGuiInputTextFlags flags =
+    ImGuiInputTextFlags flags =
         ImGuiInputTextFlags_CallbackResize | (lines ? 0 : ImGuiInputTextFlags_AutoSelectAll);
+    // What is pasted keeps its tabs, for rows of a spreadsheet; the key Tab goes on to the next field.
+    const ImGuiIO& io = ImGui::GetIO();
+    if (lines && (io.KeyCtrl || io.KeySuper) && !ImGui::IsKeyDown(ImGuiKey_Tab))
+        flags |= ImGuiInputTextFlags_AllowTabInput;
     if (lines) {
         ImGui::InputTextMultiline("##text", text.data(), text.capacity() + 1, {box.w, box.h}, flags, grow,
                                   &text);

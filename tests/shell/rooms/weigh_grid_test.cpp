@@ -276,6 +276,19 @@ TEST_CASE("by its button the matrix is put into a field, and is a judge's own") 
     CHECK(grid.page.decision().log.back().did == "Pasted 3 answers into \"Fit to the cell\" (A. Kern)");
 }
 
+TEST_CASE("rows of a spreadsheet pasted into the field keep their tabs, and Tab goes on") {
+    GridPage grid(judged_set(three));
+    grid.page.click("Paste", "button");
+    ImGui::SetClipboardText("1\t2\t\n\t1\t4\n\t\t1");
+    grid.page.key(ImGuiKey_V, ImGuiMod_Ctrl);
+    CHECK(grid.page.says("Enters 2 answers, replaces none, clears none."));
+    grid.page.key(ImGuiKey_Tab);
+    CHECK(grid.focused() == "Enter 2 answers");
+    grid.page.key(ImGuiKey_Space);
+    CHECK(grid.said("c0", "c1") == 2);
+    CHECK(grid.said("c1", "c2") == 4);
+}
+
 TEST_CASE("a decision that is only read is neither typed over nor pasted into") {
     GridPage grid(judged_set(three, {3, 2, 1}));
     grid.page.read_only = true;

@@ -108,6 +108,21 @@ TEST_CASE("three answers in a circle are named, within the limit too, and with a
     CHECK(tied.says("It is not defined where answers are ties (1)."));
 }
 
+TEST_CASE("every circle is named when asked for") {
+    // Each of seven beats the next three, in a ring: 14 circles.
+    std::vector<std::string> names;
+    for (int i = 0; i < 7; ++i) names.push_back("Item " + std::to_string(i + 1));
+    std::vector<double> upper;
+    for (int i = 0; i < 7; ++i) {
+        for (int j = i + 1; j < 7; ++j) upper.push_back(j - i <= 3 ? 2 : .5);
+    }
+    HoldPage hold(judged_set(names, upper));
+    CHECK(hold.says("And 10 more."));
+    hold.page.click("Name all circles", "button");
+    CHECK_FALSE(hold.says("And 10 more."));
+    CHECK(hold.says("Item 3 over Item 6, Item 6 over Item 7, yet Item 7 over Item 3."));
+}
+
 TEST_CASE("where a figure does not exist a dash stands there with its reason") {
     HoldPage two(judged_set({"Price", "Quality"}, {3}));
     CHECK(two.says("Nothing here can contradict"));
@@ -269,13 +284,16 @@ TEST_CASE("the fewest changes, if several, are made together in one act") {
     auto& fewest = *hold.page.examination->fewest;
     fewest.proven = false;
     fewest.changes = {{"c1", "c3", "", 1.0 / 6, 2}, {"c0", "c2", "", 4, 3}, {"c2", "c3", "", 2, .5}};
-    hold.page.examination->matters_fewest =
-        MattersAnswer{.matters = Matters::not_known, .why = "too many cases."};
+    hold.page.examination->matters_fewest = MattersAnswer{.matters = Matters::not_known,
+                                                          .pairs = {{"c1", "c3"}, {"c0", "c2"}, {"c2", "c3"}},
+                                                          .why = "Too many cases."};
     hold.page.frame(2);
     CHECK(hold.says("Three changes found; fewer may do."));
-    CHECK(hold.says("Whether other answers here could change first place is not known: too many cases."));
+    CHECK(hold.says(
+        "Whether other answers to these 3 pairs could change first place is not known. Too many cases."));
     hold.page.click("Change 3 answers together", "radio");
-    CHECK(hold.says("Floor space 2 times Noise (now 1/6). Throughput 3 times Ease of use (now 4)."));
+    CHECK(hold.says("Floor space 2 times Noise (now 1/6), Throughput 3 times Ease of use (now 4) and Noise 2 "
+                    "times Ease of use (now 1/2)."));
     hold.page.click("Make these 3 changes", "button");
     const Decision& now = hold.page.decision();
     CHECK(said_ratio(now, "goal", "", "c1", "c3") == 2);
