@@ -42,6 +42,7 @@ struct EnoughSearch::Work {
     Decision decision;
     Results results;
     OpenPairs open;
+    SolveCache cache; ///< Of the decisions in which answers are tried out.
 
     Phase phase = Phase::start;
     OpenLeadsFinding finding;
@@ -67,7 +68,7 @@ void EnoughSearch::Work::end(EnoughAnswer::Verdict verdict, std::string why) {
 /// How far the option in first place now is ahead of the best of the others once the answers are entered;
 /// below 0 where another is ahead. Keeps answers that change first place.
 double EnoughSearch::Work::gap_with(const std::vector<double>& ratios) {
-    const Results then = solve(with_answers(decision, open, ratios));
+    const Results then = solve(with_answers(decision, open, ratios), cache);
     const Id& leader = results.options[*results.first];
     std::optional<double> own;
     std::optional<double> best_other;

@@ -38,16 +38,14 @@ std::vector<std::array<Id, 2>> unanswered_pairs(const Decision& decision, const 
 
 /// Looks for answers to the pairs of one set that change first place, all else as it is: the other sets, the
 /// figures, what other persons said. The pairs may be judged already: their answers are then taken as not
-/// given
-/// ("however this is corrected"). `by`: the person whose answers are free; empty: answers agreed in the room,
-/// which stand in place of what persons said.
+/// given ("however this is corrected"). `by`: the person whose answers are free; empty: answers agreed in the
+/// room, which stand in place of what persons said.
 ///
 /// All the pairs are taken to be answered, with ratios from 1/9 to 9. A pair left out counts as the ratio
 /// that the others imply; where that lies outside, a proof does not speak of it. What is open in other sets
 /// is not part of the question.
 ///
-/// A job in slices: see LeadSearch (core/judgment/lead_search.hpp) for what is exact, bounded or only
-/// searched.
+/// A job in slices. What is exact, bounded or only searched: see LeadSearch (core/judgment/lead_search.hpp).
 class EnoughSearch {
 public:
     /// Keeps copies; `results` are those of `decision`, which is valid. Pairs that repeat or are none of the

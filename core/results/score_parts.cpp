@@ -95,13 +95,13 @@ ScoreParts::Effects ScoreParts::of_grades(const Node& leaf) const {
     std::vector<double> sum(n, 0.0);
     double known = 0;
     for (std::size_t o = 0; o < r_.options.size(); ++o) {
-        const StandingGrades given =
+        const StandingGrades grades =
             standing_grades(d_.people, leaf, r_.options[o], entries.at(leaf.id, r_.options[o]));
         for (std::size_t g = 0; g < n; ++g) {
             // An option's worth is linear in those of the grades: each alone gives its coefficient.
             std::vector<std::optional<double>> one(n, 0.0);
             one[g] = 1;
-            const auto finding = find_grade_worth(given, one);
+            const auto finding = find_grade_worth(grades, one);
             effects.missing[o] = !finding.given;
             effects.values[o][g] = finding.worth.value_or(0);
             sum[g] += effects.values[o][g];

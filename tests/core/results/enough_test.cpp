@@ -163,7 +163,8 @@ std::map<std::string, std::map<Verdict, int>> asked_at_random(std::uint64_t firs
                 const auto taken = dice.pick(given);
                 if (std::find(pairs.begin(), pairs.end(), taken) == pairs.end()) pairs.push_back(taken);
             }
-            const Verdict verdict = checked(decision, results, group.set, by, pairs, tries, seed);
+            const Verdict verdict =
+                checked(decision, results, group.set, by, pairs, pairs.empty() ? 1 : tries, seed);
             const Settings& settings = decision.settings;
             ++count[kind_of(decision, group.set)][verdict];
             ++count[combined_how(settings)][verdict];
@@ -234,7 +235,7 @@ TEST_CASE(
 }
 
 TEST_CASE("enough: many more random decisions and answers", "[.long]") {
-    CHECK(asked_at_random(1000, 2000, 100).size() == 11);
+    CHECK(asked_at_random(1000, 800, 100).size() == 11);
 }
 
 TEST_CASE("enough: nothing still open can change first place, or it can") {
