@@ -221,6 +221,12 @@ std::string needed_sentence(const Decision& decision, const SetResult& entry, co
            (left == 1 ? " pair is" : " pairs are") + " left.";
 }
 
+bool nothing_open_matters(const RoomView& view, const SetResult& entry) {
+    const Examination* found = view.examination;
+    return !view.sealed() && found != nullptr && found->set == entry.set && found->enough &&
+           found->enough->matters == Matters::proven_no;
+}
+
 std::string enough_sentence(const RoomView& view, const SetResult& entry) {
     if (view.sealed()) return ""; // It would tell of the standing.
     const Examination* found = view.examination;

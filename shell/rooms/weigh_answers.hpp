@@ -68,6 +68,9 @@ std::optional<ItemPair> next_pair(const RoomView& view, const SetResult& entry, 
 std::string needed_sentence(const Decision& decision, const SetResult& entry, const Progress& progress,
                             const Id& by);
 
+/// True where it is proven that nothing open in a set can change first place, and no seal keeps it secret.
+bool nothing_open_matters(const RoomView& view, const SetResult& entry);
+
 /// Whether what is open can still change first place, in words; empty where nobody asked or nothing is open.
 std::string enough_sentence(const RoomView& view, const SetResult& entry);
 

@@ -5,6 +5,7 @@
 #include "core/decision/lookup.hpp"
 #include "shell/rooms/size_button.hpp"
 #include "shell/rooms/text_flow.hpp"
+#include "shell/rooms/weigh_answers.hpp"
 #include "shell/rooms/weigh_hold_words.hpp"
 #include "shell/rooms/weigh_set_settings.hpp"
 #include "shell/widgets/controls.hpp"
@@ -49,6 +50,7 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
         if (!over) draw_circles(ui, view, entry, flow);
         result = corrections_.draw(ui, view, actions, entry, flow);
         if (over) draw_circles(ui, view, entry, flow);
+        draw_open(ui, view, entry, flow);
         if (entry.weights) draw_weights(ui, view, entry, flow);
         draw_terms(ui, view, entry, flow);
         draw_set_settings(ui, view, actions, settings_open_, flow);
@@ -64,6 +66,12 @@ std::optional<ItemPair> HoldCard::draw(Ui& ui, const RoomView& view, Actions& ac
     }
     area.reach(flow.y());
     return result;
+}
+
+void HoldCard::draw_open(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) {
+    const std::string text = enough_sentence(view, entry);
+    if (text.empty()) return;
+    flow.say(text, Font::body, nothing_open_matters(view, entry) ? ui.look().green : 0, 4);
 }
 
 void HoldCard::draw_circles(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) {

@@ -23,6 +23,7 @@ public:
     void shrink() { large_ = false; }
 
 private:
+    static void draw_open(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_circles(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_weights(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow);
     void draw_terms(Ui& ui, const RoomView& view, const SetResult& entry, TextFlow& flow) const;

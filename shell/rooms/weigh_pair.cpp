@@ -276,8 +276,9 @@ void PairCard::draw_progress(Ui& ui, const RoomView& view, Actions& actions, con
             actions.edit(ReopenSet{set_, view.person});
         draw_go_on(ui, view, actions, row);
     } else {
-        const std::string enough = view.sealed() ? std::string() : enough_sentence(view, entry);
-        text = enough.empty() ? needed_sentence(d, entry, progress, view.person) : enough;
+        // In one line: what is needed, unless nothing still open can matter. The card below says more.
+        text = nothing_open_matters(view, entry) ? enough_sentence(view, entry)
+                                                 : needed_sentence(d, entry, progress, view.person);
         const std::string finish = mine ? "Enough for me" : "That is all";
         const Box end = row.take_right(button_width(finish), 8);
         if (button(ui, "finish", finish, end, ButtonKind::plain, !view.read_only && progress.any)) {
