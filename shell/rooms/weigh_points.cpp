@@ -122,7 +122,8 @@ void PointsCard::draw_row(Ui& ui, const RoomView& view, Actions& actions, const 
     draw_text(ui, {names.x, names.y + 23}, range,
               {.font = Font::small, .ink = theme.quiet, .max_width = names.w - 10});
 
-    const std::vector<double>& points = preview_.empty() ? now.points : preview_;
+    // A copy: the preview goes when the gesture ends, in the middle of this.
+    const std::vector<double> points = preview_.empty() ? now.points : preview_;
     const Box field = work.take_right(field_width, 12);
     SliderState state;
     state.value = points[at];
